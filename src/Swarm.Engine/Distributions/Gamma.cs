@@ -36,7 +36,7 @@ public sealed class Gamma(double shape, double scale) : Distribution
     {
         const int Run = 128;
         ulong* keys = stackalloc ulong[Philox4x32.KeyWords];
-        double* shapes = stackalloc double[Run];
+        double* shapes = stackalloc double[3 * Run];
         int* pending = stackalloc int[Run];
         Philox4x32.ExpandKey(slice.Key, keys);
         new Span<double>(shapes, Run).Fill(shape);
@@ -46,7 +46,7 @@ public sealed class Gamma(double shape, double scale) : Distribution
             {
                 int trials = Math.Min(Run, destination.Length - start);
                 var numbers = new ItemStream((nint)keys, slice.FirstTrial + start, slice.Step, 0);
-                GammaKernel<V>.Fill(numbers, shapes, target + start, trials, pending);
+                GammaKernel<V>.Fill(numbers, shapes, target + start, trials, shapes + Run, pending);
                 Scale<V>(target + start, trials);
             }
         }

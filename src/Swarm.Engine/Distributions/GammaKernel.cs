@@ -25,48 +25,75 @@ internal static unsafe class GammaKernel<V>
     /// <param name="shape">Shapes, zero or more, one a trial.</param>
     /// <param name="target">Receives the values.</param>
     /// <param name="trials">Number of trials, a multiple of the vector width.</param>
+    /// <param name="scratch">Room for two numbers a trial.</param>
     /// <param name="pending">Room for one number a trial.</param>
-    public static void Fill(in ItemStream numbers, double* shape, double* target, int trials, int* pending)
+    public static void Fill(in ItemStream numbers, double* shape, double* target, int trials, double* scratch, int* pending)
     {
-        int left = FirstPass(numbers, shape, target, trials, pending);
+        double* normals = scratch;
+        double* uniforms = scratch + trials;
+        FillUniforms(numbers, normals, uniforms, trials);
+        MakeNormal(normals, trials);
+        int left = AcceptMost(shape, normals, uniforms, target, trials, pending, out bool isBoosted);
         for (int attempt = 0; left > 0 && attempt < MaxAttempts; attempt++)
         {
-            left = NextPass(numbers, attempt, shape, target, pending, left);
+            left = AcceptExactly(numbers, attempt, shape, target, pending, left);
+        }
+
+        if (isBoosted)
+        {
+            Boost(numbers, shape, target, trials);
         }
     }
 
-    private static int FirstPass(ItemStream numbers, double* shape, double* target, int trials, int* pending)
+    private static void FillUniforms(in ItemStream numbers, double* first, double* second, int trials)
     {
-        int left = 0;
         for (int i = 0; i < trials; i += V.Count)
         {
-            V index = V.AddIntegers(V.CreateBits((ulong)(numbers.FirstTrial + i)), V.Iota);
-            V a = V.Load(shape + i);
-            V boosted = V.LessThan(a, V.Create(1));
-            V d = Offset(a, boosted);
-            V z = Attempt(numbers, index, 0, out V uniform);
-            V value = Candidate(d, z, out V y);
-            V square = z * y * (z * y);
-            V bound = (V.Create(1) - uniform) * LaneMath.Min(V.Create(1), V.Create(1) + y);
-            V accepted = V.LessThan(square, V.Create(12) * bound);
-            if (V.Any(boosted))
-            {
-                value = value * V.Select(boosted, Boost(numbers, index, a), V.Create(1));
-            }
+            numbers.Generate(Index(numbers, i), 0, out V c0, out V c1, out V c2, out V c3);
+            V.Store(Uniform.Open(c0, c1), first + i);
+            V.Store(Uniform.Open(c2, c3), second + i);
+        }
+    }
 
-            V.Store(value, target + i);
-            ulong rejected = V.SignBits(~accepted);
+    private static void MakeNormal(double* uniforms, int trials)
+    {
+        for (int i = 0; i < trials; i += V.Count)
+        {
+            V.Store(NormalFunctions.QuantileOfOpenUniform(V.Load(uniforms + i)), uniforms + i);
+        }
+    }
+
+    private static int AcceptMost(
+        double* shape, double* normals, double* uniforms, double* target, int trials, int* pending, out bool isBoosted)
+    {
+        int left = 0;
+        V anyBoosted = V.Create(0);
+        V one = V.Create(1);
+        for (int i = 0; i < trials; i += V.Count)
+        {
+            V a = V.Load(shape + i);
+            V boosted = V.LessThan(a, one);
+            anyBoosted |= boosted;
+            V z = V.Load(normals + i);
+            V.Store(Candidate(Offset(a, boosted), z, out V y), target + i);
+            V product = z * y;
+
+            // An infinite or undefined y fails the test, as it should, so the bare comparison will do for the minimum.
+            V beyond = one + y;
+            V bound = (one - V.Load(uniforms + i)) * V.Select(V.LessThan(beyond, one), beyond, one);
+            ulong rejected = V.SignBits(~V.LessThan(product * product, V.Create(12) * bound));
             for (; rejected != 0; rejected &= rejected - 1)
             {
                 pending[left++] = i + System.Numerics.BitOperations.TrailingZeroCount(rejected);
             }
         }
 
+        isBoosted = V.Any(anyBoosted);
         return left;
     }
 
-    /// <summary>Tests one attempt of the pending trials to the end; keeps those that are rejected.</summary>
-    private static int NextPass(ItemStream numbers, int attempt, double* shape, double* target, int* pending, int count)
+    /// <summary>Tests one attempt of the pending trials to the end, side by side; keeps those that are rejected.</summary>
+    private static int AcceptExactly(in ItemStream numbers, int attempt, double* shape, double* target, int* pending, int count)
     {
         double* lanes = stackalloc double[3 * V.Count];
         double* shapes = lanes + V.Count;
@@ -82,12 +109,7 @@ internal static unsafe class GammaKernel<V>
                 shapes[lane] = shape[trial];
             }
 
-            V index = V.Load(lanes);
-            V a = V.Load(shapes);
-            V boosted = V.LessThan(a, V.Create(1));
-            V accepted = Exact(numbers, index, attempt, a, boosted, out V value);
-            V.Store(value * V.Select(boosted, Boost(numbers, index, a), V.Create(1)), values);
-            ulong taken = V.SignBits(accepted);
+            ulong taken = Test(numbers, V.Load(lanes), attempt, V.Load(shapes), values);
             for (int lane = 0; lane < used; lane++)
             {
                 int trial = pending[start + lane];
@@ -105,16 +127,40 @@ internal static unsafe class GammaKernel<V>
         return left;
     }
 
-    private static V Exact(in ItemStream numbers, V index, int attempt, V a, V boosted, out V value)
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private static ulong Test(in ItemStream numbers, V index, int attempt, V a, double* values)
     {
-        V d = Offset(a, boosted);
-        V z = Attempt(numbers, index, attempt, out V uniform);
-        value = Candidate(d, z, out V y);
+        numbers.Generate(index, attempt, out V c0, out V c1, out V c2, out V c3);
+        V z = NormalFunctions.QuantileOfOpenUniform(Uniform.Open(c0, c1));
+        V d = Offset(a, V.LessThan(a, V.Create(1)));
+        V.Store(Candidate(d, z, out V y), values);
         V cube = Cube(y);
         V h = V.FusedMultiplyAdd(V.Create(0.5) * z, z, d * (V.Create(1) - cube + Elementary.Log(cube)));
-        return V.LessThan(V.Create(-1), y) & V.LessThan(Elementary.Log(uniform), h);
+        return V.SignBits(V.LessThan(V.Create(-1), y) & V.LessThan(Elementary.Log(Uniform.Open(c2, c3)), h));
     }
 
+    /// <summary>Multiplies the values of shapes below 1 by U^(1/a), with a uniform that belongs to no attempt.</summary>
+    private static void Boost(in ItemStream numbers, double* shape, double* target, int trials)
+    {
+        V one = V.Create(1);
+        for (int i = 0; i < trials; i += V.Count)
+        {
+            V a = V.Load(shape + i);
+            V boosted = V.LessThan(a, one);
+            if (V.Any(boosted))
+            {
+                numbers.Generate(Index(numbers, i), Counter.SideAttempt, out V c0, out V c1, out _, out _);
+                V factor = Elementary.Exp(Elementary.Log(Uniform.Open(c0, c1)) / a);
+                V.Store(V.Load(target + i) * V.Select(boosted, factor, one), target + i);
+            }
+        }
+    }
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static V Index(in ItemStream numbers, int offset) =>
+        V.AddIntegers(V.CreateBits((ulong)(numbers.FirstTrial + offset)), V.Iota);
+
+    /// <summary>d = a - 1/3, or that of shape a + 1.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static V Offset(V a, V boosted) => a + V.Select(boosted, V.Create(2.0 / 3), V.Create(-1.0 / 3));
 
@@ -130,21 +176,5 @@ internal static unsafe class GammaKernel<V>
     {
         V t = V.Create(1) + y;
         return t * t * t;
-    }
-
-    [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static V Attempt(in ItemStream numbers, V index, int attempt, out V uniform)
-    {
-        numbers.Generate(index, attempt, out V c0, out V c1, out V c2, out V c3);
-        uniform = Uniform.Open(c2, c3);
-        return NormalFunctions.Quantile(Uniform.Open(c0, c1));
-    }
-
-    /// <summary>U^(1/a), with a uniform that belongs to no attempt.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
-    private static V Boost(in ItemStream numbers, V index, V a)
-    {
-        numbers.Generate(index, Counter.SideAttempt, out V c0, out V c1, out _, out _);
-        return Elementary.Exp(Elementary.Log(Uniform.Open(c0, c1)) / a);
     }
 }

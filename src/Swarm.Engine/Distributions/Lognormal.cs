@@ -41,6 +41,6 @@ public sealed class Lognormal(double logMean, double logSd) : Distribution
         [MethodImpl(MethodImplOptions.AggressiveInlining)]
         public V Of<V>(V uniform)
             where V : unmanaged, ILanes<V> =>
-            Elementary.Exp(V.FusedMultiplyAdd(V.Create(logSd), NormalFunctions.Quantile(uniform), V.Create(logMean)));
+            Elementary.Exp(V.FusedMultiplyAdd(V.Create(logSd), NormalFunctions.QuantileOfOpenUniform(uniform), V.Create(logMean)));
     }
 }

@@ -26,6 +26,6 @@ public sealed class Normal(double mean, double sd) : Distribution
         [MethodImpl(MethodImplOptions.AggressiveInlining)]
         public V Of<V>(V uniform)
             where V : unmanaged, ILanes<V> =>
-            V.FusedMultiplyAdd(V.Create(sd), NormalFunctions.Quantile(uniform), V.Create(mean));
+            V.FusedMultiplyAdd(V.Create(sd), NormalFunctions.QuantileOfOpenUniform(uniform), V.Create(mean));
     }
 }

@@ -68,6 +68,9 @@ internal unsafe interface ILanes<TSelf>
     /// <summary>One bit a lane from the sign bits, lane 0 lowest.</summary>
     static abstract ulong SignBits(TSelf mask);
 
+    /// <summary>Exclusive or of three, as integers.</summary>
+    static abstract TSelf Xor(TSelf a, TSelf b, TSelf c);
+
     /// <summary>Adds 64-bit integers, wrapping.</summary>
     static abstract TSelf AddIntegers(TSelf a, TSelf b);
 

@@ -90,6 +90,9 @@ internal readonly unsafe struct Lanes128 : ILanes<Lanes128>
     public static ulong SignBits(Lanes128 mask) => Vector128.ExtractMostSignificantBits(mask._v);
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public static Lanes128 Xor(Lanes128 a, Lanes128 b, Lanes128 c) => new((a._v.AsUInt64() ^ b._v.AsUInt64() ^ c._v.AsUInt64()).AsDouble());
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes128 AddIntegers(Lanes128 a, Lanes128 b) => new((a._v.AsUInt64() + b._v.AsUInt64()).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]

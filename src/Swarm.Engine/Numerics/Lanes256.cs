@@ -90,6 +90,9 @@ internal readonly unsafe struct Lanes256 : ILanes<Lanes256>
     public static ulong SignBits(Lanes256 mask) => Vector256.ExtractMostSignificantBits(mask._v);
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public static Lanes256 Xor(Lanes256 a, Lanes256 b, Lanes256 c) => new((a._v.AsUInt64() ^ b._v.AsUInt64() ^ c._v.AsUInt64()).AsDouble());
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes256 AddIntegers(Lanes256 a, Lanes256 b) => new((a._v.AsUInt64() + b._v.AsUInt64()).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]

@@ -64,6 +64,9 @@ internal readonly unsafe struct Lanes64 : ILanes<Lanes64>
 
     public static ulong SignBits(Lanes64 mask) => mask.Bits >> 63;
 
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public static Lanes64 Xor(Lanes64 a, Lanes64 b, Lanes64 c) => CreateBits(a.Bits ^ b.Bits ^ c.Bits);
+
     public static Lanes64 AddIntegers(Lanes64 a, Lanes64 b) => CreateBits(a.Bits + b.Bits);
 
     public static Lanes64 SubtractIntegers(Lanes64 a, Lanes64 b) => CreateBits(a.Bits - b.Bits);

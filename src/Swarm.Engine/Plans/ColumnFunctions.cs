@@ -3,14 +3,14 @@ using Swarm.Engine.Numerics;
 
 namespace Swarm.Engine.Plans;
 
-/// <summary>A function of one operand, compiled into the loop of <see cref="ColumnKernels"/>.</summary>
+/// <summary>A function of one operand, compiled into the loop of <see cref="ColumnKernels{V}"/>.</summary>
 internal interface IUnaryFunction
 {
     static abstract V Of<V>(V a)
         where V : unmanaged, ILanes<V>;
 }
 
-/// <summary>A function of two operands, compiled into the loop of <see cref="ColumnKernels"/>.</summary>
+/// <summary>A function of two operands, compiled into the loop of <see cref="ColumnKernels{V}"/>.</summary>
 internal interface IBinaryFunction
 {
     static abstract V Of<V>(V a, V b)

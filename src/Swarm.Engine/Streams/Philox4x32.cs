@@ -55,8 +55,8 @@ internal static unsafe class Philox4x32
     {
         V product0 = V.MultiplyLow32(c0, V.CreateBits(Multiplier0));
         V product1 = V.MultiplyLow32(c2, V.CreateBits(Multiplier1));
-        c0 = V.ShiftRight(product1, 32) ^ c1 ^ V.CreateBits(roundKey[0]);
-        c2 = V.ShiftRight(product0, 32) ^ c3 ^ V.CreateBits(roundKey[1]);
+        c0 = V.Xor(V.ShiftRight(product1, 32), c1, V.CreateBits(roundKey[0]));
+        c2 = V.Xor(V.ShiftRight(product0, 32), c3, V.CreateBits(roundKey[1]));
         c1 = product1;
         c3 = product0;
     }

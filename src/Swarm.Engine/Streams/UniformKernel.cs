@@ -39,27 +39,45 @@ internal static unsafe class UniformKernel
         where V : unmanaged, ILanes<V>
         where T : unmanaged, IUniformTransform
     {
+        fixed (double* start = destination)
+        {
+            FillUniforms<V>(slice, start, destination.Length);
+            Transform<V, T>(transform, start, destination.Length);
+        }
+    }
+
+    private static void FillUniforms<V>(DrawSlice slice, double* group, int trials)
+        where V : unmanaged, ILanes<V>
+    {
         ulong* keys = stackalloc ulong[Philox4x32.KeyWords];
         Philox4x32.ExpandKey(slice.Key, keys);
         ulong firstIndex = (ulong)slice.FirstTrial / TrialsPerGroup * IndexesPerGroup;
-        fixed (double* start = destination)
+        double* end = group + trials;
+        for (; group < end; group += TrialsPerGroup, firstIndex += IndexesPerGroup)
         {
-            double* group = start;
-            double* end = start + destination.Length;
-            for (; group < end; group += TrialsPerGroup, firstIndex += IndexesPerGroup)
+            for (int lane = 0; lane < IndexesPerGroup; lane += V.Count)
             {
-                for (int lane = 0; lane < IndexesPerGroup; lane += V.Count)
-                {
-                    V index = V.AddIntegers(V.CreateBits(firstIndex + (ulong)lane), V.Iota);
-                    V c0 = index;
-                    V c1 = Counter.Word1(index, slice.Step);
-                    V c2 = V.CreateBits(0);
-                    V c3 = V.CreateBits(0);
-                    Philox4x32.Generate(keys, ref c0, ref c1, ref c2, ref c3);
-                    V.Store(transform.Of(Uniform.Open(c0, c1)), group + lane);
-                    V.Store(transform.Of(Uniform.Open(c2, c3)), group + IndexesPerGroup + lane);
-                }
+                V index = V.AddIntegers(V.CreateBits(firstIndex + (ulong)lane), V.Iota);
+                V c0 = index;
+                V c1 = Counter.Word1(index, slice.Step);
+                V c2 = V.CreateBits(0);
+                V c3 = V.CreateBits(0);
+                Philox4x32.Generate(keys, ref c0, ref c1, ref c2, ref c3);
+                V.Store(Uniform.Open(c0, c1), group + lane);
+                V.Store(Uniform.Open(c2, c3), group + IndexesPerGroup + lane);
             }
+        }
+    }
+
+    /// <summary>A loop of its own: one copy of a long transform is all that the compiler is willing to inline.</summary>
+    private static void Transform<V, T>(T transform, double* values, int trials)
+        where V : unmanaged, ILanes<V>
+        where T : unmanaged, IUniformTransform
+    {
+        double* end = values + trials;
+        for (; values < end; values += V.Count)
+        {
+            V.Store(transform.Of(V.Load(values)), values);
         }
     }
 }

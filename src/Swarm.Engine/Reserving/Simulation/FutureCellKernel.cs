@@ -1,4 +1,3 @@
-using System.Runtime.CompilerServices;
 using Swarm.Engine.Distributions;
 using Swarm.Engine.Numerics;
 using Swarm.Engine.Streams;
@@ -21,7 +20,7 @@ internal sealed unsafe class FutureCellKernel<V> : IDisposable
     {
         _process = process;
         _trials = trials;
-        _columns = new ColumnMemory(2, trials);
+        _columns = new ColumnMemory(4, trials);
         _pending = new int[trials];
     }
 
@@ -39,7 +38,7 @@ internal sealed unsafe class FutureCellKernel<V> : IDisposable
         {
             if (_process == ProcessError.Gamma)
             {
-                GammaKernel<V>.Fill(numbers, size, unit, _trials, pending);
+                GammaKernel<V>.Fill(numbers, size, unit, _trials, _columns[2], pending);
             }
             else
             {

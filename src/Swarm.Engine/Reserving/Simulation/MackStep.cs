@@ -17,7 +17,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
     {
         _process = process;
         _trials = trials;
-        _columns = new ColumnMemory(2, trials);
+        _columns = new ColumnMemory(4, trials);
         _pending = new int[trials];
     }
 
@@ -75,7 +75,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
 
         fixed (int* pending = _pending)
         {
-            GammaKernel<V>.Fill(numbers, shape, unit, _trials, pending);
+            GammaKernel<V>.Fill(numbers, shape, unit, _trials, _columns[2], pending);
         }
 
         for (int t = 0; t < _trials; t += V.Count)
@@ -102,6 +102,6 @@ internal sealed unsafe class MackStep<V> : IDisposable
     {
         V index = V.AddIntegers(V.CreateBits((ulong)(numbers.FirstTrial + offset)), V.Iota);
         numbers.Generate(index, 0, out V c0, out V c1, out _, out _);
-        return NormalFunctions.Quantile(Uniform.Open(c0, c1));
+        return NormalFunctions.QuantileOfOpenUniform(Uniform.Open(c0, c1));
     }
 }

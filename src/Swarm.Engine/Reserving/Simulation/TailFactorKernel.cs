@@ -28,7 +28,7 @@ internal sealed unsafe class TailFactorKernel<V>(TailFactorInput input, int tria
     {
         V index = V.AddIntegers(V.CreateBits((ulong)trial), V.Iota);
         numbers.Generate(index, 0, out V c0, out V c1, out _, out _);
-        V z = NormalFunctions.Quantile(Uniform.Open(c0, c1));
+        V z = NormalFunctions.QuantileOfOpenUniform(Uniform.Open(c0, c1));
         return Elementary.Exp(V.FusedMultiplyAdd(V.Create(input.LogSd), z, V.Create(input.LogMean)));
     }
 }
