@@ -111,17 +111,19 @@ internal sealed class QuantityGraph
         }
     }
 
-    /// <summary>A component's output is once per trial; one that ends in <c>[step]</c> belongs to a step.</summary>
     private void DefineOutputs(Component component, int index)
     {
         for (int output = 0; output < component.Outputs.Count; output++)
         {
-            string name = component.Outputs[output];
-            int bracket = name.IndexOf('[', StringComparison.Ordinal);
-            Instance instance = bracket < 0
-                ? new Instance(name, Instance.PerTrial)
-                : new Instance(name[..bracket], int.Parse(name.AsSpan(bracket + 1, name.Length - bracket - 2), CultureInfo.InvariantCulture));
-            _definitions[instance] = new ComponentDefinition(index, output);
+            _definitions[new Instance(component.Outputs[output], Instance.PerTrial)] = new ComponentDefinition(index, output);
+        }
+
+        foreach ((string name, int step, string? output) in component.Stepped(Horizon))
+        {
+            Expression value = output is null
+                ? new NumberExpression(0, default)
+                : new ReferenceExpression(output, StepIndex.None, 0, default);
+            _definitions[new Instance(name, step)] = new FormulaDefinition(value);
         }
     }
 }

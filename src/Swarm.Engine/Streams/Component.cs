@@ -14,6 +14,9 @@ internal abstract class Component(string name)
     /// <summary>Names of the columns, in the order in which a kernel writes them.</summary>
     public abstract IReadOnlyList<string> Outputs { get; }
 
+    /// <summary>Quantities with a step that are outputs under another name; no output stands for zero.</summary>
+    public virtual IEnumerable<(string Name, int Step, string? Output)> Stepped(int horizon) => [];
+
     /// <summary>A kernel with its own working memory.</summary>
     public abstract ComponentKernel CreateKernel(LaneWidth width);
 }

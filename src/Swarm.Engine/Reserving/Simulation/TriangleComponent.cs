@@ -1,0 +1,57 @@
+using Swarm.Engine.Numerics;
+using Swarm.Engine.Streams;
+
+namespace Swarm.Engine.Reserving.Simulation;
+
+/// <summary>A triangle as a component: unpaid claims in total, by origin and by calendar period.</summary>
+internal sealed class TriangleComponent : Component
+{
+    private readonly RunOffShape _shape;
+    private readonly string _latest;
+    private readonly Func<LaneWidth, ComponentKernel> _createKernel;
+
+    private TriangleComponent(string name, Triangle triangle, RunOffShape shape, Func<LaneWidth, ComponentKernel> createKernel)
+        : base(name)
+    {
+        _shape = shape;
+        _latest = PeriodLabel.LatestCalendar(triangle);
+        _createKernel = createKernel;
+        Outputs = TriangleNames.Of(name, triangle, shape);
+    }
+
+    /// <inheritdoc/>
+    public override IReadOnlyList<string> Outputs { get; }
+
+    /// <inheritdoc/>
+    public override IEnumerable<(string Name, int Step, string? Output)> Stepped(int horizon)
+    {
+        for (int step = 1; step <= horizon; step++)
+        {
+            string? output = step <= _shape.FuturePeriods ? $"{Name}.paid.{PeriodLabel.Add(_latest, step)}" : null;
+            yield return ($"{Name}.paid", step, output);
+        }
+    }
+
+    /// <inheritdoc/>
+    public override ComponentKernel CreateKernel(LaneWidth width) => _createKernel(width);
+
+    /// <summary>The bootstrap of a triangle.</summary>
+    public static TriangleComponent OfBootstrap(string name, Triangle triangle, BootstrapInput input) =>
+        new(name, triangle, input.Pseudo.Shape, width => width switch
+        {
+            LaneWidth.Vector512 => new BootstrapKernel<Lanes512>(input),
+            LaneWidth.Vector256 => new BootstrapKernel<Lanes256>(input),
+            LaneWidth.Vector128 => new BootstrapKernel<Lanes128>(input),
+            _ => new BootstrapKernel<Lanes64>(input),
+        });
+
+    /// <summary>Mack's model of a triangle.</summary>
+    public static TriangleComponent OfMack(string name, Triangle triangle, MackInput input) =>
+        new(name, triangle, input.Shape, width => width switch
+        {
+            LaneWidth.Vector512 => new MackKernel<Lanes512>(input),
+            LaneWidth.Vector256 => new MackKernel<Lanes256>(input),
+            LaneWidth.Vector128 => new MackKernel<Lanes128>(input),
+            _ => new MackKernel<Lanes64>(input),
+        });
+}
