@@ -1,0 +1,185 @@
+using Swarm.Engine.Numerics;
+
+namespace Swarm.Engine.Summaries;
+
+/// <summary>
+/// The moments of a span by two passes over 8 virtual lanes: lane j holds the positions j modulo 8, whatever the width of the
+/// vectors, and the lanes are added up in one fixed tree.
+/// </summary>
+internal static unsafe class MomentKernel
+{
+    private const int Virtual = Edition.VirtualLanes;
+
+    public static Moments Of(ReadOnlySpan<double> values, LaneWidth width) => width switch
+    {
+        LaneWidth.Vector512 => Of<Lanes512>(values),
+        LaneWidth.Vector256 => Of<Lanes256>(values),
+        LaneWidth.Vector128 => Of<Lanes128>(values),
+        _ => Of<Lanes64>(values),
+    };
+
+    /// <summary>How many values lie above a threshold; the threshold itself does not count.</summary>
+    public static long CountAbove(ReadOnlySpan<double> values, double threshold, LaneWidth width) => width switch
+    {
+        LaneWidth.Vector512 => CountAbove<Lanes512>(values, threshold),
+        LaneWidth.Vector256 => CountAbove<Lanes256>(values, threshold),
+        LaneWidth.Vector128 => CountAbove<Lanes128>(values, threshold),
+        _ => CountAbove<Lanes64>(values, threshold),
+    };
+
+    private static Moments Of<T>(ReadOnlySpan<double> values)
+        where T : unmanaged, ILanes<T>
+    {
+        if (values.IsEmpty) return default;
+        var lanes = stackalloc double[Virtual * 5];
+        fixed (double* first = values)
+        {
+            var (min, max) = Extremes<T>(first, values.Length);
+            if (min == max) return new Moments { Count = values.Length, Mean = min, Min = min, Max = min };
+            var mean = MeanOf<T>(first, values.Length, lanes);
+            PowerSums<T>(first, values.Length, mean, lanes);
+            return new Moments
+            {
+                Count = values.Length,
+                Mean = mean,
+                M2 = Tree(lanes),
+                M3 = Tree(lanes + Virtual),
+                M4 = Tree(lanes + (2 * Virtual)),
+                M5 = Tree(lanes + (3 * Virtual)),
+                M6 = Tree(lanes + (4 * Virtual)),
+                Min = min,
+                Max = max,
+            };
+        }
+    }
+
+    private static (double Min, double Max) Extremes<T>(double* values, int count)
+        where T : unmanaged, ILanes<T>
+    {
+        var min = values[0];
+        var max = values[0];
+        var i = 0;
+        if (count >= T.Count)
+        {
+            var low = T.Load(values);
+            var high = low;
+            for (i = T.Count; i <= count - T.Count; i += T.Count)
+            {
+                var x = T.Load(values + i);
+                low = T.Select(T.LessThan(x, low), x, low);
+                high = T.Select(T.LessThan(high, x), x, high);
+            }
+
+            var ends = stackalloc double[2 * Virtual];
+            T.Store(low, ends);
+            T.Store(high, ends + Virtual);
+            for (var lane = 0; lane < T.Count; lane++)
+            {
+                min = ends[lane] < min ? ends[lane] : min;
+                max = ends[Virtual + lane] > max ? ends[Virtual + lane] : max;
+            }
+        }
+
+        for (; i < count; i++)
+        {
+            min = values[i] < min ? values[i] : min;
+            max = values[i] > max ? values[i] : max;
+        }
+
+        // Adding +0 turns -0 into +0: which of the equal zeros came first depends on the width.
+        return (min + 0.0, max + 0.0);
+    }
+
+    private static double MeanOf<T>(double* values, int count, double* lanes)
+        where T : unmanaged, ILanes<T>
+    {
+        Sums<T>(values, count, 1, lanes);
+        var sum = Tree(lanes);
+        if (double.IsFinite(sum)) return sum / count;
+
+        // Values near the end of the range: the sum overflows, the mean cannot.
+        const double Scale = 1.0 / (1 << 30);
+        Sums<T>(values, count, Scale, lanes);
+        return Tree(lanes) / count / Scale;
+    }
+
+    private static void Sums<T>(double* values, int count, double scale, double* lanes)
+        where T : unmanaged, ILanes<T>
+    {
+        var whole = count / Virtual * Virtual;
+        var factor = T.Create(scale);
+        for (var lane = 0; lane < Virtual; lane += T.Count)
+        {
+            var sum = T.Create(0);
+            for (var i = lane; i < whole; i += Virtual) sum += T.Load(values + i) * factor;
+            T.Store(sum, lanes + lane);
+        }
+
+        for (var i = whole; i < count; i++) lanes[i - whole] += values[i] * scale;
+    }
+
+    private static void PowerSums<T>(double* values, int count, double mean, double* lanes)
+        where T : unmanaged, ILanes<T>
+    {
+        var whole = count / Virtual * Virtual;
+        var center = T.Create(mean);
+        for (var lane = 0; lane < Virtual; lane += T.Count)
+        {
+            T s2 = T.Create(0), s3 = s2, s4 = s2, s5 = s2, s6 = s2;
+            for (var i = lane; i < whole; i += Virtual)
+            {
+                var d = T.Load(values + i) - center;
+                var d2 = d * d;
+                var d3 = d2 * d;
+                s2 += d2;
+                s3 += d3;
+                s4 = T.FusedMultiplyAdd(d2, d2, s4);
+                s5 = T.FusedMultiplyAdd(d2, d3, s5);
+                s6 = T.FusedMultiplyAdd(d3, d3, s6);
+            }
+
+            T.Store(s2, lanes + lane);
+            T.Store(s3, lanes + Virtual + lane);
+            T.Store(s4, lanes + (2 * Virtual) + lane);
+            T.Store(s5, lanes + (3 * Virtual) + lane);
+            T.Store(s6, lanes + (4 * Virtual) + lane);
+        }
+
+        for (var i = whole; i < count; i++)
+        {
+            var d = values[i] - mean;
+            var d2 = d * d;
+            var d3 = d2 * d;
+            var lane = lanes + (i - whole);
+            lane[0] += d2;
+            lane[Virtual] += d3;
+            lane[2 * Virtual] = Math.FusedMultiplyAdd(d2, d2, lane[2 * Virtual]);
+            lane[3 * Virtual] = Math.FusedMultiplyAdd(d2, d3, lane[3 * Virtual]);
+            lane[4 * Virtual] = Math.FusedMultiplyAdd(d3, d3, lane[4 * Virtual]);
+        }
+    }
+
+    private static long CountAbove<T>(ReadOnlySpan<double> values, double threshold)
+        where T : unmanaged, ILanes<T>
+    {
+        fixed (double* first = values)
+        {
+            var limit = T.Create(threshold);
+            var counts = T.CreateBits(0);
+            var i = 0;
+
+            // A comparison mask is the integer -1, so subtracting it counts.
+            for (; i <= values.Length - T.Count; i += T.Count)
+                counts = T.SubtractIntegers(counts, T.LessThan(limit, T.Load(first + i)));
+            var lanes = stackalloc double[Virtual];
+            T.Store(counts, lanes);
+            var above = 0L;
+            for (var lane = 0; lane < T.Count; lane++) above += BitConverter.DoubleToInt64Bits(lanes[lane]);
+            for (; i < values.Length; i++) above += first[i] > threshold ? 1 : 0;
+            return above;
+        }
+    }
+
+    private static double Tree(double* lanes) =>
+        ((lanes[0] + lanes[4]) + (lanes[2] + lanes[6])) + ((lanes[1] + lanes[5]) + (lanes[3] + lanes[7]));
+}
