@@ -97,7 +97,7 @@ public sealed class LocalRun
         lock (_lock)
         {
             _trialsDone += _run.TrialsOfLeaf(leaf);
-            _progress?.Invoke(new RunProgress(_trialsDone, _run.Settings.Trials, _reduction.Preview));
+            _progress?.Invoke(new RunProgress(_trialsDone, _run.Settings.Trials, outcome => _reduction.Preview(outcome, ErrorMethod.ClosedForm)));
         }
     }
 

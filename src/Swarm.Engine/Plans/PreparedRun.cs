@@ -1,5 +1,4 @@
 using Swarm.Engine.Models;
-using Swarm.Engine.Reserving.Simulation;
 using Swarm.Engine.Streams;
 using Swarm.Engine.Summaries;
 
@@ -13,7 +12,7 @@ internal sealed class PreparedRun
         Settings = settings;
         Shape = new RunShape(settings.Trials);
         Outcomes = ReportedOutcomes.Of(model);
-        Components = [.. model.Triangles.Select(triangle => TriangleModels.Component(triangle, settings.Seed))];
+        Components = [];
         Compiled = PlanCompiler.Compile(model, settings.Seed, Components, [.. Outcomes.Select(outcome => outcome.Instance)]);
     }
 
