@@ -34,9 +34,9 @@ public sealed class Gamma(double shape, double scale) : Distribution
     private unsafe void Fill<V>(in DrawSlice slice, Span<double> destination)
         where V : unmanaged, ILanes<V>
     {
-        const int Run = 128;
+        const int Run = 256;
         ulong* keys = stackalloc ulong[Philox4x32.KeyWords];
-        double* shapes = stackalloc double[3 * Run];
+        double* shapes = stackalloc double[(1 + GammaKernel<V>.ScratchColumns) * Run];
         int* pending = stackalloc int[Run];
         Philox4x32.ExpandKey(slice.Key, keys);
         new Span<double>(shapes, Run).Fill(shape);

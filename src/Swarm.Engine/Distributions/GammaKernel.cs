@@ -17,6 +17,9 @@ namespace Swarm.Engine.Distributions;
 internal static unsafe class GammaKernel<V>
     where V : unmanaged, ILanes<V>
 {
+    /// <summary>Columns of scratch memory that a call needs.</summary>
+    public const int ScratchColumns = 4;
+
     // A rejection has a chance of 5 % at the worst shape: 60 in a row do not happen.
     private const int MaxAttempts = 1000;
 
@@ -25,18 +28,17 @@ internal static unsafe class GammaKernel<V>
     /// <param name="shape">Shapes, zero or more, one a trial.</param>
     /// <param name="target">Receives the values.</param>
     /// <param name="trials">Number of trials, a multiple of the vector width.</param>
-    /// <param name="scratch">Room for two numbers a trial.</param>
+    /// <param name="scratch">Room for <see cref="ScratchColumns"/> numbers a trial.</param>
     /// <param name="pending">Room for one number a trial.</param>
     public static void Fill(in ItemStream numbers, double* shape, double* target, int trials, double* scratch, int* pending)
     {
-        double* normals = scratch;
-        double* uniforms = scratch + trials;
-        FillUniforms(numbers, normals, uniforms, trials);
-        MakeNormal(normals, trials);
-        int left = AcceptMost(shape, normals, uniforms, target, trials, pending, out bool isBoosted);
+        var columns = new Columns(scratch, trials);
+        FillUniforms(numbers, columns.Normals, columns.Uniforms, trials);
+        MakeNormal(columns.Normals, trials);
+        int left = AcceptMost(shape, columns.Normals, columns.Uniforms, target, trials, pending, out bool isBoosted);
         for (int attempt = 0; left > 0 && attempt < MaxAttempts; attempt++)
         {
-            left = AcceptExactly(numbers, attempt, shape, target, pending, left);
+            left = AcceptExactly(numbers, attempt, shape, target, columns, pending, left);
         }
 
         if (isBoosted)
@@ -45,6 +47,7 @@ internal static unsafe class GammaKernel<V>
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private static void FillUniforms(in ItemStream numbers, double* first, double* second, int trials)
     {
         for (int i = 0; i < trials; i += V.Count)
@@ -55,6 +58,7 @@ internal static unsafe class GammaKernel<V>
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private static void MakeNormal(double* uniforms, int trials)
     {
         for (int i = 0; i < trials; i += V.Count)
@@ -63,6 +67,7 @@ internal static unsafe class GammaKernel<V>
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private static int AcceptMost(
         double* shape, double* normals, double* uniforms, double* target, int trials, int* pending, out bool isBoosted)
     {
@@ -93,53 +98,74 @@ internal static unsafe class GammaKernel<V>
     }
 
     /// <summary>Tests one attempt of the pending trials to the end, side by side; keeps those that are rejected.</summary>
-    private static int AcceptExactly(in ItemStream numbers, int attempt, double* shape, double* target, int* pending, int count)
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private static int AcceptExactly(
+        in ItemStream numbers, int attempt, double* shape, double* target, in Columns columns, int* pending, int count)
     {
-        double* lanes = stackalloc double[3 * V.Count];
-        double* shapes = lanes + V.Count;
-        double* values = shapes + V.Count;
+        int padded = Gather(numbers.FirstTrial, shape, columns, pending, count);
+        FillUniforms(numbers, attempt, columns, padded);
+        MakeNormal(columns.Normals, padded);
+        TestAgainstLogarithms(columns, padded);
         int left = 0;
-        for (int start = 0; start < count; start += V.Count)
+        for (int k = 0; k < count; k++)
         {
-            int used = Math.Min(V.Count, count - start);
-            for (int lane = 0; lane < V.Count; lane++)
-            {
-                int trial = pending[start + Math.Min(lane, used - 1)];
-                lanes[lane] = BitConverter.Int64BitsToDouble(numbers.FirstTrial + trial);
-                shapes[lane] = shape[trial];
-            }
-
-            ulong taken = Test(numbers, V.Load(lanes), attempt, V.Load(shapes), values);
-            for (int lane = 0; lane < used; lane++)
-            {
-                int trial = pending[start + lane];
-                if ((taken >> lane & 1) != 0)
-                {
-                    target[trial] = values[lane];
-                }
-                else
-                {
-                    pending[left++] = trial;
-                }
-            }
+            int trial = pending[k];
+            target[trial] = columns.Normals[k];
+            pending[left] = trial;
+            left += columns.Uniforms[k] != 0 ? 0 : 1;
         }
 
         return left;
     }
 
+    /// <summary>Trial numbers and shapes of the pending trials side by side; the last is repeated to fill a vector.</summary>
     [MethodImpl(MethodImplOptions.NoInlining)]
-    private static ulong Test(in ItemStream numbers, V index, int attempt, V a, double* values)
+    private static int Gather(long firstTrial, double* shape, in Columns columns, int* pending, int count)
     {
-        numbers.Generate(index, attempt, out V c0, out V c1, out V c2, out V c3);
-        V z = NormalFunctions.QuantileOfOpenUniform(Uniform.Open(c0, c1));
-        V d = Offset(a, V.LessThan(a, V.Create(1)));
-        V.Store(Candidate(d, z, out V y), values);
-        V cube = Cube(y);
-        V h = V.FusedMultiplyAdd(V.Create(0.5) * z, z, d * (V.Create(1) - cube + Elementary.Log(cube)));
-        return V.SignBits(V.LessThan(V.Create(-1), y) & V.LessThan(Elementary.Log(Uniform.Open(c2, c3)), h));
+        int padded = (count + V.Count - 1) / V.Count * V.Count;
+        for (int k = 0; k < padded; k++)
+        {
+            int trial = pending[Math.Min(k, count - 1)];
+            columns.Trials[k] = BitConverter.Int64BitsToDouble(firstTrial + trial);
+            columns.Shapes[k] = shape[trial];
+        }
+
+        return padded;
+    }
+
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private static void FillUniforms(in ItemStream numbers, int attempt, in Columns columns, int trials)
+    {
+        for (int k = 0; k < trials; k += V.Count)
+        {
+            numbers.Generate(V.Load(columns.Trials + k), attempt, out V c0, out V c1, out V c2, out V c3);
+            V.Store(Uniform.Open(c0, c1), columns.Normals + k);
+            V.Store(Uniform.Open(c2, c3), columns.Uniforms + k);
+        }
+    }
+
+    /// <summary>Replaces normals by candidates and uniforms by 1 where the candidate is accepted, by 0 where it is not.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private static void TestAgainstLogarithms(in Columns columns, int trials)
+    {
+        V one = V.Create(1);
+        for (int k = 0; k < trials; k += V.Count)
+        {
+            V a = V.Load(columns.Shapes + k);
+            V d = Offset(a, V.LessThan(a, one));
+            V z = V.Load(columns.Normals + k);
+            V.Store(Candidate(d, z, out V y), columns.Normals + k);
+            V cube = Cube(y);
+            V bound = V.FusedMultiplyAdd(V.Create(0.5) * z, z, d * (one - cube + Elementary.Log(cube)));
+
+            // A negative cube has no logarithm: the comparison with NaN is false, and the attempt is rejected as it should be.
+            V accepted = V.LessThan(Elementary.Log(V.Load(columns.Uniforms + k)), bound);
+            V.Store(accepted & one, columns.Uniforms + k);
+        }
     }
 
     /// <summary>Multiplies the values of shapes below 1 by U^(1/a), with a uniform that belongs to no attempt.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private static void Boost(in ItemStream numbers, double* shape, double* target, int trials)
     {
         V one = V.Create(1);
@@ -176,5 +202,16 @@ internal static unsafe class GammaKernel<V>
     {
         V t = V.Create(1) + y;
         return t * t * t;
+    }
+
+    private readonly struct Columns(double* scratch, int trials)
+    {
+        public double* Normals { get; } = scratch;
+
+        public double* Uniforms { get; } = scratch + trials;
+
+        public double* Trials { get; } = scratch + (2 * trials);
+
+        public double* Shapes { get; } = scratch + (3 * trials);
     }
 }

@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using Swarm.Engine.Distributions;
 using Swarm.Engine.Numerics;
 using Swarm.Engine.Streams;
@@ -20,11 +21,12 @@ internal sealed unsafe class FutureCellKernel<V> : IDisposable
     {
         _process = process;
         _trials = trials;
-        _columns = new ColumnMemory(4, trials);
+        _columns = new ColumnMemory(2 + GammaKernel<V>.ScratchColumns, trials);
         _pending = new int[trials];
     }
 
     /// <summary>Replaces conditional means by amounts.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public void Draw(in ItemStream numbers, double scale, double* cell)
     {
         double* size = _columns[0];

@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using Swarm.Engine.Distributions;
 using Swarm.Engine.Numerics;
 using Swarm.Engine.Streams;
@@ -17,11 +18,12 @@ internal sealed unsafe class MackStep<V> : IDisposable
     {
         _process = process;
         _trials = trials;
-        _columns = new ColumnMemory(4, trials);
+        _columns = new ColumnMemory(2 + GammaKernel<V>.ScratchColumns, trials);
         _pending = new int[trials];
     }
 
     /// <summary>Draws a factor with a mean and a standard error, lognormal so that it stays above 0.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public void DrawFactor(in ItemStream numbers, double mean, double error, double* target)
     {
         double logVariance = Elementary.Log1p(error / mean * (error / mean));
@@ -53,6 +55,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
 
     public void Dispose() => _columns.Dispose();
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void Multiply(double* cumulative, double* factor)
     {
         for (int t = 0; t < _trials; t += V.Count)
@@ -62,6 +65,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
     }
 
     /// <summary>Shape f^2 C / sigma^2, scale sigma^2 / f.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void AdvanceGamma(in ItemStream numbers, double* factor, double sigma, double* cumulative)
     {
         double* shape = _columns[0];
@@ -84,6 +88,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void AdvanceLognormal(in ItemStream numbers, double* factor, double sigma, double* cumulative)
     {
         V variance = V.Create(sigma * sigma);

@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using Swarm.Engine.Numerics;
 using Swarm.Engine.Streams;
 
@@ -62,6 +63,7 @@ internal sealed unsafe class RunOffKernel<V> : IDisposable
     }
 
     /// <summary>The next cell's conditional mean, and the cumulative amount after it.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void Advance(double* factor)
     {
         double* cumulative = Cumulative;
@@ -75,6 +77,7 @@ internal sealed unsafe class RunOffKernel<V> : IDisposable
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void TakeTail(double* tailExcess, double share)
     {
         for (int t = 0; t < _trials; t += V.Count)
