@@ -12,14 +12,14 @@ internal sealed unsafe class MackStep<V> : IDisposable
     private readonly ProcessError _process;
     private readonly int _trials;
     private readonly ColumnMemory _columns;
-    private readonly int[] _pending;
+    private readonly GammaKernel<V> _gamma;
 
     public MackStep(ProcessError process, int trials)
     {
         _process = process;
         _trials = trials;
-        _columns = new ColumnMemory(2 + GammaKernel<V>.ScratchColumns, trials);
-        _pending = new int[trials];
+        _columns = new ColumnMemory(2, trials);
+        _gamma = new GammaKernel<V>(1, trials);
     }
 
     /// <summary>Draws a factor with a mean and a standard error, lognormal so that it stays above 0.</summary>
@@ -53,7 +53,11 @@ internal sealed unsafe class MackStep<V> : IDisposable
         }
     }
 
-    public void Dispose() => _columns.Dispose();
+    public void Dispose()
+    {
+        _columns.Dispose();
+        _gamma.Dispose();
+    }
 
     [MethodImpl(MethodImplOptions.NoInlining)]
     private void Multiply(double* cumulative, double* factor)
@@ -77,11 +81,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
             V.Store(f * f * V.Load(cumulative + t) / variance, shape + t);
         }
 
-        fixed (int* pending = _pending)
-        {
-            GammaKernel<V>.Fill(numbers, shape, unit, _trials, _columns[2], pending);
-        }
-
+        _gamma.Fill(numbers, 1, shape, unit);
         for (int t = 0; t < _trials; t += V.Count)
         {
             V.Store(V.Load(unit + t) * (variance / V.Load(factor + t)), cumulative + t);
