@@ -9,6 +9,20 @@ namespace Swarm.Engine.Distributions;
 /// <param name="high">Upper end, above the lower.</param>
 public sealed class ContinuousUniform(double low, double high) : Distribution
 {
+    /// <summary><c>uniform(low, high)</c>.</summary>
+    public static DistributionForm Form { get; } = new(
+        "uniform",
+        [
+            new ParameterForm("low", ParameterKind.Number, "Lower end."),
+            new ParameterForm("high", ParameterKind.Number, "Upper end, above the lower."),
+        ],
+        "Uniform distribution between two ends.",
+        arguments => DistributionBinding.Of(
+            arguments.Number("low") < arguments.Number("high")
+                ? []
+                : [new ParameterProblem("high", "high must be above low", null)],
+            () => new ContinuousUniform(arguments.Number("low"), arguments.Number("high"))));
+
     /// <inheritdoc/>
     public override double Mean => (0.5 * low) + (0.5 * high);
 

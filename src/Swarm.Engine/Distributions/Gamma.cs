@@ -13,6 +13,18 @@ public sealed class Gamma(double shape, double scale) : Distribution
 {
     private const int Run = 256;
 
+    /// <summary><c>gamma(shape, scale)</c>.</summary>
+    public static DistributionForm Form { get; } = new(
+        "gamma",
+        [
+            new ParameterForm("shape", ParameterKind.Number, "Shape, above 0."),
+            new ParameterForm("scale", ParameterKind.Number, "Scale, above 0; the mean is shape times scale."),
+        ],
+        "Gamma distribution.",
+        arguments => DistributionBinding.Of(
+            [.. arguments.Positive("shape"), .. arguments.Positive("scale")],
+            () => new Gamma(arguments.Number("shape"), arguments.Number("scale"))));
+
     /// <inheritdoc/>
     public override double Mean => shape * scale;
 

@@ -9,6 +9,30 @@ namespace Swarm.Engine.Distributions;
 /// <param name="logSd">Standard deviation of the logarithm, zero or more.</param>
 public sealed class Lognormal(double logMean, double logSd) : Distribution
 {
+    /// <summary><c>lognormal(mean, sd)</c>: by the arithmetic mean and standard deviation.</summary>
+    public static DistributionForm FormOfMeanAndSd { get; } = new(
+        "lognormal",
+        [
+            new ParameterForm("mean", ParameterKind.Number, "Arithmetic mean, above 0."),
+            new ParameterForm("sd", ParameterKind.Number, "Arithmetic standard deviation, 0 or more."),
+        ],
+        "Lognormal distribution with this mean and standard deviation.",
+        arguments => DistributionBinding.Of(
+            [.. arguments.Positive("mean"), .. arguments.NotNegative("sd")],
+            () => OfMeanAndSd(arguments.Number("mean"), arguments.Number("sd"))));
+
+    /// <summary><c>lognormal(log_mean, log_sd)</c>: by the mean and standard deviation of the logarithm.</summary>
+    public static DistributionForm FormOfLogs { get; } = new(
+        "lognormal",
+        [
+            new ParameterForm("log_mean", ParameterKind.Number, "Mean of the natural logarithm."),
+            new ParameterForm("log_sd", ParameterKind.Number, "Standard deviation of the natural logarithm, 0 or more."),
+        ],
+        "Lognormal distribution whose logarithm has this mean and standard deviation.",
+        arguments => DistributionBinding.Of(
+            [.. arguments.NotNegative("log_sd")],
+            () => new Lognormal(arguments.Number("log_mean"), arguments.Number("log_sd"))));
+
     /// <inheritdoc/>
     public override double Mean => Elementary.Exp(logMean + (0.5 * logSd * logSd));
 

@@ -9,6 +9,18 @@ namespace Swarm.Engine.Distributions;
 /// <param name="sd">Standard deviation, zero or more.</param>
 public sealed class Normal(double mean, double sd) : Distribution
 {
+    /// <summary><c>normal(mean, sd)</c>.</summary>
+    public static DistributionForm Form { get; } = new(
+        "normal",
+        [
+            new ParameterForm("mean", ParameterKind.Number, "Mean."),
+            new ParameterForm("sd", ParameterKind.Number, "Standard deviation, 0 or more."),
+        ],
+        "Normal distribution.",
+        arguments => DistributionBinding.Of(
+            [.. arguments.NotNegative("sd")],
+            () => new Normal(arguments.Number("mean"), arguments.Number("sd"))));
+
     /// <inheritdoc/>
     public override double Mean => mean;
 

@@ -7,6 +7,9 @@ namespace Swarm.Engine.Distributions;
 /// <summary>One of several values, each with a chance. Values come by inverse transform in the order of the list.</summary>
 public sealed class OneOf : Distribution
 {
+    // Chances written with nine decimals are taken as meant.
+    private const double RoundingAllowance = 1e-9;
+
     private readonly double[] _values;
     private readonly double[] _cumulative;
 
@@ -33,6 +36,18 @@ public sealed class OneOf : Distribution
         Skewness = Moment(chances, x => (x - Mean) * (x - Mean) * (x - Mean)) / (variance * Sd);
     }
 
+    /// <summary><c>one_of(values, chances)</c>.</summary>
+    public static DistributionForm Form { get; } = new(
+        "one_of",
+        [
+            new ParameterForm("values", ParameterKind.Numbers, "The values."),
+            new ParameterForm("chances", ParameterKind.Numbers, "The chance of each value; they sum to 1."),
+        ],
+        "One of several values, each with its chance.",
+        arguments => DistributionBinding.Of(
+            Problems(arguments.Numbers("values"), arguments.Numbers("chances")),
+            () => new OneOf(arguments.Numbers("values"), arguments.Numbers("chances"))));
+
     /// <inheritdoc/>
     public override double Mean { get; }
 
@@ -50,6 +65,27 @@ public sealed class OneOf : Distribution
         {
             UniformKernel.Fill(slice, new Transform((nint)values, (nint)cumulative, _values.Length), destination);
         }
+    }
+
+    private static ParameterProblem[] Problems(IReadOnlyList<double> values, IReadOnlyList<double> chances)
+    {
+        if (values.Count != chances.Count)
+        {
+            return [new ParameterProblem("chances", $"{values.Count} values need {values.Count} chances, not {chances.Count}", null)];
+        }
+
+        double sum = 0;
+        foreach (double chance in chances)
+        {
+            sum += chance;
+        }
+
+        ParameterProblem[] negative = chances.Any(chance => chance < 0)
+            ? [new ParameterProblem("chances", "a chance must be 0 or more", null)]
+            : [];
+        return Math.Abs(sum - 1) <= RoundingAllowance
+            ? negative
+            : [.. negative, new ParameterProblem("chances", $"the chances sum to {sum:R}, not to 1", "write fractions as 1/3")];
     }
 
     private double Moment(IReadOnlyList<double> chances, Func<double, double> of)

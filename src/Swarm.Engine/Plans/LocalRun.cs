@@ -6,6 +6,9 @@ namespace Swarm.Engine.Plans;
 /// <summary>Runs a model on this machine's cores.</summary>
 public sealed class LocalRun
 {
+    /// <summary>A larger share of trials drawn again would bend the distribution.</summary>
+    private const double LargestRedrawnShare = 0.001;
+
     private readonly PreparedRun _run;
     private readonly RunReduction _reduction;
     private readonly Action<RunProgress>? _progress;
@@ -56,8 +59,20 @@ public sealed class LocalRun
             return RunOutcome.Failed(TrialTrace.Explain(_run.Compiled, fault));
         }
 
-        return RunOutcome.Of(_run, _reduction.Finish(), _redrawn);
+        return FirstOverdrawn() is { } component
+            ? RunOutcome.Refused(TooManyRedraws(component))
+            : RunOutcome.Of(_run, _reduction.Finish(), _redrawn);
     }
+
+    private string? FirstOverdrawn()
+    {
+        int index = Array.FindIndex(_redrawn, count => count > _run.Settings.Trials * LargestRedrawnShare);
+        return index < 0 ? null : _run.Components[index].Name;
+    }
+
+    private static string TooManyRedraws(string component) =>
+        $"more than 0.1 % of the pseudo-triangles of '{component}' gave no development factor, so those that did are no fair sample; "
+        + "leave out the link ratios or the origins that make a column's sum negative, choose 'scale: by_development', or use 'method: mack'";
 
     private void Work()
     {

@@ -14,6 +14,11 @@ public sealed record RunOutcome
     /// <summary>Why the run stopped, or null.</summary>
     public Fault? Fault { get; init; }
 
+    /// <summary>Why a run that came to its end has no result, and what to do; or null.</summary>
+    public string? Refusal { get; init; }
+
+    internal static RunOutcome Refused(string reason) => new() { Refusal = reason };
+
     internal static RunOutcome Failed(Fault fault) => new() { Fault = fault };
 
     internal static RunOutcome Of(PreparedRun run, IReadOnlyList<OutcomeResult> results, IReadOnlyList<long> redrawn) => new()
