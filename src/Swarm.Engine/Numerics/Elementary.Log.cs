@@ -57,13 +57,12 @@ internal static partial class Elementary
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static V LogSeries<V>(V z)
         where V : unmanaged, ILanes<V>
-        => V.Create(0.1479752973791556)
-            .Then(z, 0.15313901097975893)
-            .Then(z, 0.18183569820607617)
-            .Then(z, 0.2222219847453862)
-            .Then(z, 0.28571428743274635)
-            .Then(z, 0.3999999999941106)
-            .Then(z, 0.6666666666666735);
+    {
+        var z2 = z * z;
+        var z4 = z2 * z2;
+        return Polynomial.Three(z, z2, 0.18183569820607617, 0.15313901097975893, 0.1479752973791556)
+            .Over(z4, Polynomial.Four(z, z2, 0.6666666666666735, 0.3999999999941106, 0.28571428743274635, 0.2222219847453862));
+    }
 
     /// <summary>
     /// log(4 x) for a positive normal number, with an absolute error near 2^-53 rather than a relative one: enough for
@@ -75,16 +74,11 @@ internal static partial class Elementary
     {
         var m = SplitNormal(x, out var exponent);
         var k = exponent - V.Create(TwoTo52 + 1023.0 - 2.0);
-        var f = m - V.Create(1.0);
-        var s = f / (f + V.Create(2.0));
+        var s = (m - V.Create(1.0)) / (m + V.Create(1.0));
         var z = s * s;
-        var series = V.Create(0.1682134081311993)
-            .Then(z, 0.18123521703051193)
-            .Then(z, 0.22223375231298306)
-            .Then(z, 0.2857141708298968)
-            .Then(z, 0.40000000052539725)
-            .Then(z, 0.6666666666658673)
-            .Then(z, 2.0);
+        var z2 = z * z;
+        var series = Polynomial.Three(z, z2, 0.22223375231298306, 0.18123521703051193, 0.1682134081311993)
+            .Over(z2 * z2, Polynomial.Four(z, z2, 2.0, 0.6666666666658673, 0.40000000052539725, 0.2857141708298968));
         return V.FusedMultiplyAdd(k, V.Create(Ln2), s * series);
     }
 

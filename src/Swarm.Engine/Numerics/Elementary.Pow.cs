@@ -20,6 +20,7 @@ internal static partial class Elementary
             : PowOfNormal(x, y, 0.0);
 
     /// <summary>(x * 2^-scale)^y for a positive normal x and a finite y: exp of y times a double-double logarithm.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static V PowOfNormal<V>(V x, V y, double scale)
         where V : unmanaged, ILanes<V>
     {
@@ -33,6 +34,7 @@ internal static partial class Elementary
     }
 
     /// <summary>The logarithm of x * 2^-scale as an unevaluated sum with a relative error near 2^-65.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static V LogInTwoParts<V>(V x, double scale, out V low)
         where V : unmanaged, ILanes<V>
     {
@@ -77,14 +79,12 @@ internal static partial class Elementary
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     private static V PowSeries<V>(V z)
         where V : unmanaged, ILanes<V>
-        => V.Create(0.11990496200895435)
-            .Then(z, 0.11674641054830442)
-            .Then(z, 0.1333632611523353)
-            .Then(z, 0.15384556646748745)
-            .Then(z, 0.18181818873561895)
-            .Then(z, 0.2222222221751049)
-            .Then(z, 0.2857142857144522)
-            .Then(z, 0.3999999999999998);
+    {
+        var z2 = z * z;
+        var z4 = z2 * z2;
+        return Polynomial.Four(z, z2, 0.15384556646748745, 0.1333632611523353, 0.11674641054830442, 0.11990496200895435)
+            .Over(z4, Polynomial.Four(z, z2, 0.3999999999999998, 0.2857142857144522, 0.2222222221751049, 0.18181818873561895));
+    }
 
     /// <summary>Any base and exponent.</summary>
     [MethodImpl(MethodImplOptions.NoInlining)]

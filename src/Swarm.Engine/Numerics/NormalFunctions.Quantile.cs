@@ -4,67 +4,67 @@ namespace Swarm.Engine.Numerics;
 
 internal static partial class NormalFunctions
 {
-    private const double CentralLimit = 5.75;
+    // The central region is u (1 - u) >= e^-5.75 / 4, or 99.8 % of all u.
+    private const double CentralLimit = 0.0007956951991274167;
+    private const ulong CentralLimitBits = 0x3F4A_12C6_6DCD_95D0;
+    private const ulong QuarterBits = 0x3FD0_0000_0000_0000;
 
     /// <summary>
     /// The z with P(Z &lt;= z) = u, within 3 ulp, for every double u in (0, 1), subnormals included. quantile(0) = -inf,
-    /// quantile(1) = +inf, quantile(1/2) = 0, NaN outside [0, 1].
+    /// quantile(1) = +inf, quantile(1/2) = 0, NaN outside [0, 1]. Antisymmetric to the bit where 1 - u is exact.
     /// </summary>
+    /// <remarks>
+    /// After Giles (2010): z = v p(w) with v = 2u - 1 and w = -log(1 - v^2), which makes one polynomial enough for the central
+    /// region. 1 - v^2 = 4 u (1 - u) comes out of one rounding. The logarithm needs only an absolute error of 2^-53, since p is
+    /// flat near w = 0.
+    /// </remarks>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static V Quantile<V>(V u)
         where V : unmanaged, ILanes<V>
     {
-        const ulong BitsOfTwoToMinus53 = 0x3CA0_0000_0000_0000;
-        const ulong BitsOfJustBelowOne = 0x3FEF_FFFF_FFFF_FFFF;
-        return LaneMath.AnyOutside(u, BitsOfTwoToMinus53, BitsOfJustBelowOne) ? QuantileAnywhere(u) : QuantileOfOpenUniform(u);
+        var product = V.FusedMultiplyAdd(-u, u, u);
+        return LaneMath.AnyOutside(product, CentralLimitBits, QuarterBits) ? QuantileAnywhere(u) : CentralQuantile(u, product);
     }
 
     /// <summary>
-    /// As <see cref="Quantile{V}(V)"/> for u in [2^-53, 1 - 2^-53] alone, where every uniform of the streams lies. Antisymmetric to
-    /// the bit about 1/2 for u = (2k + 1) 2^-53. Garbage outside.
+    /// <see cref="Quantile{V}(V)"/>, to the bit, with a cheaper test: for u strictly between 0 and 1 alone, as every uniform of the
+    /// streams is.
     /// </summary>
-    /// <remarks>
-    /// After Giles (2010): z = v p(w) with v = 2u - 1 and w = -log(4 u (1 - u)) = -log(1 - v^2), which makes one polynomial enough for w below 5.75,
-    /// or 99.8 % of all u. The logarithm needs only an absolute error of 2^-53, since p is flat near w = 0.
-    /// </remarks>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static V QuantileOfOpenUniform<V>(V u)
         where V : unmanaged, ILanes<V>
     {
-        var v = V.FusedMultiplyAdd(u, V.Create(2.0), V.Create(-1.0));
-        var w = -Elementary.LogOfFourfold(V.FusedMultiplyAdd(-u, u, u));
-        var z = v * CentralSeries(w - V.Create(CentralLimit / 2));
-        return V.Any(V.LessThan(V.Create(CentralLimit), w)) ? WithTails(v, w, z) : z;
+        var product = V.FusedMultiplyAdd(-u, u, u);
+        return V.Any(V.SubtractIntegers(product, V.CreateBits(CentralLimitBits)))
+            ? QuantileAnywhere(u)
+            : CentralQuantile(u, product);
     }
 
-    /// <summary>z / v in w - 2.875, minimax: relative error below 2^-53.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static V CentralSeries<V>(V t)
+    private static V CentralQuantile<V>(V u, V product)
         where V : unmanaged, ILanes<V>
-        => V.Create(-1.622159634386052e-19)
-            .Then(t, 2.8254259557529586e-18)
-            .Then(t, 1.6397789484334243e-18)
-            .Then(t, -2.3519471666958567e-16)
-            .Then(t, 1.046249255300089e-15)
-            .Then(t, 7.25516885835427e-15)
-            .Then(t, -9.240417683199782e-14)
-            .Then(t, 1.6729440979877066e-13)
-            .Then(t, 3.6737170951928146e-12)
-            .Then(t, -3.0634875144356644e-11)
-            .Then(t, -3.079246792071507e-12)
-            .Then(t, 1.6046432557023066e-09)
-            .Then(t, -9.722352437971222e-09)
-            .Then(t, -2.368697914294389e-08)
-            .Then(t, 6.651561017111576e-07)
-            .Then(t, -3.042183867263789e-06)
-            .Then(t, -1.591747623903788e-05)
-            .Then(t, 0.00028647477623336523)
-            .Then(t, -0.001323176696881567)
-            .Then(t, -0.007645292795788141)
-            .Then(t, 0.34368812364578666)
-            .Then(t, 2.253196081755608);
+        => V.FusedMultiplyAdd(u, V.Create(2.0), V.Create(-1.0)) * CentralSeries(Elementary.LogOfFourfold(product));
 
-    // In the tails z = y p(1/y - centre) with y = sqrt(w): minimax, relative errors below 2^-53.
+    /// <summary>
+    /// z / v in -w, minimax: relative error below 2^-53. About w = 0 rather than a centre, which would round w: the terms stay
+    /// below 2, the nearest singularity being at w = 2 pi i.
+    /// </summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static V CentralSeries<V>(V l)
+        where V : unmanaged, ILanes<V>
+    {
+        var l2 = l * l;
+        var l4 = l2 * l2;
+        return V.Create(1.622159634386052e-19)
+            .Over(l4, Polynomial.Four(l, l2, 1.2733703862049002e-13, 9.239421941517018e-15, 4.423936412947781e-16, 1.2619214748358747e-17))
+            .Over(l4, Polynomial.Four(l, l2, 9.841803867967394e-11, 3.3994253596300884e-11, 7.830297364777272e-12, 1.2045512238913747e-12))
+            .Over(l4, Polynomial.Four(l, l2, -3.0828674648313896e-08, 2.157545873985478e-09, 1.4001426279654513e-09, 2.8887897431979633e-10))
+            .Over(l4, Polynomial.Four(l, l2, -6.59183091149338e-05, 2.85726859934684e-06, 1.4330114936163498e-06, -5.1348927953538154e-08))
+            .Over(l4, Polynomial.Four(l, l2, -0.3281168738691922, 0.01633323614776268, 0.0033023324201379672, -0.0001810805059478576))
+            .Over(l, V.Create(1.2533141373155003));
+    }
+
+    // In the tails z = v y p(1/y - centre) with y = sqrt(w): minimax, relative errors below 2^-53.
     private const double NearCentre = 0.2907354803381361;
     private const double FarCentre = 0.125;
     private const double FarthestCentre = 0.05991484184914842;
@@ -97,15 +97,7 @@ internal static partial class NormalFunctions
         6574925429104.577,
     ];
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
-    private static V WithTails<V>(V v, V w, V central)
-        where V : unmanaged, ILanes<V>
-    {
-        var y = V.Sqrt(w);
-        var near = y * Polynomial.Evaluate(NearTail, (V.Create(1.0) / y) - V.Create(NearCentre));
-        return V.Select(V.LessThan(V.Create(CentralLimit), w), LaneMath.CopySign(near, v), central);
-    }
-
+    /// <summary>Any u: the tails, the ends, and what is no probability.</summary>
     [MethodImpl(MethodImplOptions.NoInlining)]
     private static V QuantileAnywhere<V>(V u)
         where V : unmanaged, ILanes<V>
@@ -113,23 +105,26 @@ internal static partial class NormalFunctions
         var zero = V.Create(0.0);
         var one = V.Create(1.0);
         var infinity = V.Create(double.PositiveInfinity);
-        var v = V.FusedMultiplyAdd(u, V.Create(2.0), V.Create(-1.0));
-        var small = V.LessThan(u, V.Create(1.1102230246251565e-16));
+        var product = V.FusedMultiplyAdd(-u, u, u);
+        var v = V.FusedMultiplyAdd(u, V.Create(2.0), -one);
 
-        // Below 2^-53 the factor 1 - u is 1, and u may be subnormal; other lanes keep the arithmetic of QuantileOfOpenUniform.
-        var w = -V.Select(
-            small,
-            Elementary.Log(u) + V.Create(1.3862943611198906),
-            Elementary.LogOfFourfold(V.FusedMultiplyAdd(-u, u, u)));
-        var result = WithTails(v, w, v * CentralSeries(w - V.Create(CentralLimit / 2)));
-        var y = V.Sqrt(w);
+        // Below 2^-53 the factor 1 - u is 1, and u may be subnormal.
+        var small = V.LessThan(u, V.Create(1.1102230246251565e-16));
+        var logarithm = V.Select(small, Elementary.Log(u) + V.Create(1.3862943611198906), Elementary.LogOfFourfold(product));
+        var y = V.Sqrt(-logarithm);
         var inverse = one / y;
-        var far = y * Polynomial.Evaluate(FarTail, inverse - V.Create(FarCentre));
-        var farthest = y * Polynomial.Evaluate(FarthestTail, inverse - V.Create(FarthestCentre));
-        far = V.Select(V.LessThan(V.Create(12.0), y), farthest, far);
-        result = V.Select(V.LessThan(V.Create(6.0), y), -far, result);
+        var tail = y * Polynomial.Evaluate(NearTail, inverse - V.Create(NearCentre));
+        if (V.Any(V.LessThan(V.Create(6.0), y)))
+        {
+            var far = y * Polynomial.Evaluate(FarTail, inverse - V.Create(FarCentre));
+            var farthest = y * Polynomial.Evaluate(FarthestTail, inverse - V.Create(FarthestCentre));
+            far = V.Select(V.LessThan(V.Create(12.0), y), farthest, far);
+            tail = V.Select(V.LessThan(V.Create(6.0), y), far, tail);
+        }
+
+        var result = V.Select(V.LessThan(product, V.Create(CentralLimit)), v * tail, CentralQuantile(u, product));
         result = V.Select(V.EqualTo(u, zero), -infinity, result);
         result = V.Select(V.EqualTo(u, one), infinity, result);
-        return V.Select(~(V.LessThanOrEqual(zero, u) & V.LessThanOrEqual(u, one)), LaneMath.NaN<V>(), result);
+        return V.Select(V.LessThanOrEqual(zero, u) & V.LessThanOrEqual(u, one), result, LaneMath.NaN<V>());
     }
 }

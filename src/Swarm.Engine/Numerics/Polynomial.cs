@@ -2,22 +2,43 @@ using System.Runtime.CompilerServices;
 
 namespace Swarm.Engine.Numerics;
 
-/// <summary>Polynomials by Horner's rule, one fused multiply-add a step.</summary>
+/// <summary>
+/// Polynomials in the order of Estrin (1960) by fours, then Horner in x^4: as many operations as Horner's rule and two more, but
+/// a chain a third as long, which is what bounds a loop over vectors. Coefficients ascend.
+/// </summary>
 internal static class Polynomial
 {
-    /// <summary>One step: p * x + c.</summary>
+    /// <summary>c0 + c1 x.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static V Then<V>(this V p, V x, double c)
+    public static V Two<V>(V x, double c0, double c1)
         where V : unmanaged, ILanes<V>
-        => V.FusedMultiplyAdd(p, x, V.Create(c));
+        => V.FusedMultiplyAdd(V.Create(c1), x, V.Create(c0));
 
-    /// <summary>Coefficients from the constant upwards. A loop: for rare paths; hot ones write their steps out.</summary>
-    public static V Evaluate<V>(ReadOnlySpan<double> ascending, V x)
+    /// <summary>c0 + c1 x + c2 x^2.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public static V Three<V>(V x, V x2, double c0, double c1, double c2)
+        where V : unmanaged, ILanes<V>
+        => V.FusedMultiplyAdd(V.Create(c2), x2, Two(x, c0, c1));
+
+    /// <summary>c0 + c1 x + c2 x^2 + c3 x^3.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public static V Four<V>(V x, V x2, double c0, double c1, double c2, double c3)
+        where V : unmanaged, ILanes<V>
+        => V.FusedMultiplyAdd(Two(x, c2, c3), x2, Two(x, c0, c1));
+
+    /// <summary>The next lower terms under a higher part: higher * power + lower.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public static V Over<V>(this V higher, V power, V lower)
+        where V : unmanaged, ILanes<V>
+        => V.FusedMultiplyAdd(higher, power, lower);
+
+    /// <summary>Horner's rule in a loop: for rare paths; hot ones write their terms out.</summary>
+    public static V Evaluate<V>(ReadOnlySpan<double> coefficients, V x)
         where V : unmanaged, ILanes<V>
     {
-        var p = V.Create(ascending[^1]);
-        for (var i = ascending.Length - 2; i >= 0; i--)
-            p = p.Then(x, ascending[i]);
+        var p = V.Create(coefficients[^1]);
+        for (var i = coefficients.Length - 2; i >= 0; i--)
+            p = V.FusedMultiplyAdd(p, x, V.Create(coefficients[i]));
         return p;
     }
 }
