@@ -18,6 +18,8 @@ public sealed class ContinuousUniform(double low, double high) : Distribution
     /// <inheritdoc/>
     public override double Skewness => 0;
 
+    internal override bool CanOverflow => !double.IsFinite(Math.Abs(low) + Math.Abs(high));
+
     internal override void Fill(in DrawSlice slice, Span<double> destination) =>
         UniformKernel.Fill(slice, new Transform(low, high), destination);
 

@@ -11,6 +11,8 @@ namespace Swarm.Engine.Distributions;
 /// <param name="scale">Scale, above 0.</param>
 public sealed class Gamma(double shape, double scale) : Distribution
 {
+    private const int Run = 256;
+
     /// <inheritdoc/>
     public override double Mean => shape * scale;
 
@@ -34,30 +36,33 @@ public sealed class Gamma(double shape, double scale) : Distribution
     private unsafe void Fill<V>(in DrawSlice slice, Span<double> destination)
         where V : unmanaged, ILanes<V>
     {
-        const int Run = 128;
+        GammaKernel<V> kernel = Scratch<V>.Kernel;
         ulong* keys = stackalloc ulong[Philox4x32.KeyWords];
-        double* shapes = stackalloc double[3 * Run];
-        int* pending = stackalloc int[Run];
+        double* shapes = stackalloc double[2 * Run];
+        double* units = shapes + Run;
         Philox4x32.ExpandKey(slice.Key, keys);
         new Span<double>(shapes, Run).Fill(shape);
-        fixed (double* target = destination)
+        for (int start = 0; start < destination.Length; start += Run)
         {
-            for (int start = 0; start < destination.Length; start += Run)
+            var numbers = new ItemStream((nint)keys, slice.FirstTrial + start, slice.Step, 0);
+            kernel.Fill(numbers, 1, shapes, units);
+            for (int i = 0; i < Run; i += V.Count)
             {
-                int trials = Math.Min(Run, destination.Length - start);
-                var numbers = new ItemStream((nint)keys, slice.FirstTrial + start, slice.Step, 0);
-                GammaKernel<V>.Fill(numbers, shapes, target + start, trials, shapes + Run, pending);
-                Scale<V>(target + start, trials);
+                V.Store(V.Load(units + i) * V.Create(scale), units + i);
             }
+
+            int trials = Math.Min(Run, destination.Length - start);
+            new ReadOnlySpan<double>(units, trials).CopyTo(destination.Slice(start, trials));
         }
     }
 
-    private unsafe void Scale<V>(double* values, int trials)
+    /// <summary>Working memory of a thread; it holds no value from one call to the next.</summary>
+    private static class Scratch<V>
         where V : unmanaged, ILanes<V>
     {
-        for (int i = 0; i < trials; i += V.Count)
-        {
-            V.Store(V.Load(values + i) * V.Create(scale), values + i);
-        }
+        [ThreadStatic]
+        private static GammaKernel<V>? _kernel;
+
+        public static GammaKernel<V> Kernel => _kernel ??= new GammaKernel<V>(1, Run);
     }
 }

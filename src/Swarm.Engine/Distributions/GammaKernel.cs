@@ -10,66 +10,103 @@ namespace Swarm.Engine.Distributions;
 /// <para>
 /// Most values are settled without a logarithm. The series of h is -(z y)^2/12 (1 - 4/5 y + 4/6 y^2 - 4/7 y^3 ...), so that
 /// h >= -(z y)^2 / (12 min(1, 1 + y)), and since exp(h) >= 1 + h, U is accepted where (1 - U) min(1, 1 + y) > (z y)^2 / 12.
-/// That leaves about one value in 36 d to the second pass, which takes the left-over trials side by side. Which trials share a
-/// vector changes no bit: attempt k of a trial's item has a counter of its own.
+/// That leaves about one value in 36 d to the second pass, which takes the left-over values of all rows side by side. Which values
+/// share a vector changes no bit: attempt k of a trial's item has a counter of its own.
 /// </para>
 /// </summary>
-internal static unsafe class GammaKernel<V>
+internal sealed unsafe class GammaKernel<V> : IDisposable
     where V : unmanaged, ILanes<V>
 {
     // A rejection has a chance of 5 % at the worst shape: 60 in a row do not happen.
     private const int MaxAttempts = 1000;
 
-    /// <summary>Draws one value a trial.</summary>
-    /// <param name="numbers">Which random numbers.</param>
-    /// <param name="shape">Shapes, zero or more, one a trial.</param>
-    /// <param name="target">Receives the values.</param>
-    /// <param name="trials">Number of trials, a multiple of the vector width.</param>
-    /// <param name="scratch">Room for two numbers a trial.</param>
-    /// <param name="pending">Room for one number a trial.</param>
-    public static void Fill(in ItemStream numbers, double* shape, double* target, int trials, double* scratch, int* pending)
-    {
-        double* normals = scratch;
-        double* uniforms = scratch + trials;
-        FillUniforms(numbers, normals, uniforms, trials);
-        MakeNormal(normals, trials);
-        int left = AcceptMost(shape, normals, uniforms, target, trials, pending, out bool isBoosted);
-        for (int attempt = 0; left > 0 && attempt < MaxAttempts; attempt++)
-        {
-            left = AcceptExactly(numbers, attempt, shape, target, pending, left);
-        }
+    private readonly int _trials;
+    private readonly ColumnMemory _columns;
+    private readonly int[] _pending;
+    private readonly bool[] _isBoosted;
 
-        if (isBoosted)
-        {
-            Boost(numbers, shape, target, trials);
-        }
+    /// <param name="rows">Largest number of rows of a call.</param>
+    /// <param name="trials">Trials of a row, a multiple of the vector width.</param>
+    public GammaKernel(int rows, int trials)
+    {
+        _trials = trials;
+        _columns = new ColumnMemory(5, trials);
+        _pending = new int[rows * trials];
+        _isBoosted = new bool[rows];
     }
 
-    private static void FillUniforms(in ItemStream numbers, double* first, double* second, int trials)
-    {
-        for (int i = 0; i < trials; i += V.Count)
-        {
-            numbers.Generate(Index(numbers, i), 0, out V c0, out V c1, out V c2, out V c3);
-            V.Store(Uniform.Open(c0, c1), first + i);
-            V.Store(Uniform.Open(c2, c3), second + i);
-        }
-    }
+    private double* Normals => _columns[0];
 
-    private static void MakeNormal(double* uniforms, int trials)
-    {
-        for (int i = 0; i < trials; i += V.Count)
-        {
-            V.Store(NormalFunctions.QuantileOfOpenUniform(V.Load(uniforms + i)), uniforms + i);
-        }
-    }
+    private double* Uniforms => _columns[1];
 
-    private static int AcceptMost(
-        double* shape, double* normals, double* uniforms, double* target, int trials, int* pending, out bool isBoosted)
+    private double* Trials => _columns[2];
+
+    private double* Items => _columns[3];
+
+    private double* Shapes => _columns[4];
+
+    /// <summary>Draws one value a trial of each row. Row r draws as item <c>numbers.Item + r</c>.</summary>
+    /// <param name="numbers">Which random numbers; the item is that of the first row.</param>
+    /// <param name="rows">Number of rows.</param>
+    /// <param name="shape">Shapes, zero or more: row after row.</param>
+    /// <param name="target">Receives the values: row after row.</param>
+    public void Fill(in ItemStream numbers, int rows, double* shape, double* target)
     {
         int left = 0;
+        for (int row = 0; row < rows; row++)
+        {
+            FillUniforms(numbers with { Item = numbers.Item + row });
+            MakeNormal(_trials);
+            left = AcceptMost(shape, target, row, left);
+        }
+
+        for (int attempt = 0; left > 0 && attempt < MaxAttempts; attempt++)
+        {
+            left = AcceptPending(numbers, attempt, shape, target, left);
+        }
+
+        for (int row = 0; row < rows; row++)
+        {
+            if (_isBoosted[row])
+            {
+                Boost(numbers with { Item = numbers.Item + row }, shape + ((nint)row * _trials), target + ((nint)row * _trials));
+            }
+        }
+    }
+
+    public void Dispose() => _columns.Dispose();
+
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private void FillUniforms(in ItemStream numbers)
+    {
+        for (int i = 0; i < _trials; i += V.Count)
+        {
+            numbers.Generate(Index(numbers, i), 0, out V c0, out V c1, out V c2, out V c3);
+            V.Store(Uniform.Open(c0, c1), Normals + i);
+            V.Store(Uniform.Open(c2, c3), Uniforms + i);
+        }
+    }
+
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private void MakeNormal(int trials)
+    {
+        double* normals = Normals;
+        for (int i = 0; i < trials; i += V.Count)
+        {
+            V.Store(NormalFunctions.QuantileOfOpenUniform(V.Load(normals + i)), normals + i);
+        }
+    }
+
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private int AcceptMost(double* shapes, double* targets, int row, int left)
+    {
+        double* shape = shapes + ((nint)row * _trials);
+        double* target = targets + ((nint)row * _trials);
+        double* normals = Normals;
+        double* uniforms = Uniforms;
         V anyBoosted = V.Create(0);
         V one = V.Create(1);
-        for (int i = 0; i < trials; i += V.Count)
+        for (int i = 0; i < _trials; i += V.Count)
         {
             V a = V.Load(shape + i);
             V boosted = V.LessThan(a, one);
@@ -84,66 +121,97 @@ internal static unsafe class GammaKernel<V>
             ulong rejected = V.SignBits(~V.LessThan(product * product, V.Create(12) * bound));
             for (; rejected != 0; rejected &= rejected - 1)
             {
-                pending[left++] = i + System.Numerics.BitOperations.TrailingZeroCount(rejected);
+                _pending[left++] = (row * _trials) + i + System.Numerics.BitOperations.TrailingZeroCount(rejected);
             }
         }
 
-        isBoosted = V.Any(anyBoosted);
+        _isBoosted[row] = V.Any(anyBoosted);
         return left;
     }
 
-    /// <summary>Tests one attempt of the pending trials to the end, side by side; keeps those that are rejected.</summary>
-    private static int AcceptExactly(in ItemStream numbers, int attempt, double* shape, double* target, int* pending, int count)
+    /// <summary>Tests one attempt of all pending values to the end, as many side by side as a column holds.</summary>
+    private int AcceptPending(in ItemStream numbers, int attempt, double* shape, double* target, int count)
     {
-        double* lanes = stackalloc double[3 * V.Count];
-        double* shapes = lanes + V.Count;
-        double* values = shapes + V.Count;
         int left = 0;
-        for (int start = 0; start < count; start += V.Count)
+        for (int start = 0; start < count; start += _trials)
         {
-            int used = Math.Min(V.Count, count - start);
-            for (int lane = 0; lane < V.Count; lane++)
-            {
-                int trial = pending[start + Math.Min(lane, used - 1)];
-                lanes[lane] = BitConverter.Int64BitsToDouble(numbers.FirstTrial + trial);
-                shapes[lane] = shape[trial];
-            }
-
-            ulong taken = Test(numbers, V.Load(lanes), attempt, V.Load(shapes), values);
-            for (int lane = 0; lane < used; lane++)
-            {
-                int trial = pending[start + lane];
-                if ((taken >> lane & 1) != 0)
-                {
-                    target[trial] = values[lane];
-                }
-                else
-                {
-                    pending[left++] = trial;
-                }
-            }
+            left = AcceptExactly(numbers, attempt, shape, target, start, Math.Min(_trials, count - start), left);
         }
 
         return left;
+    }
+
+    private int AcceptExactly(in ItemStream numbers, int attempt, double* shape, double* target, int start, int count, int left)
+    {
+        int padded = (count + V.Count - 1) / V.Count * V.Count;
+        Gather(numbers, shape, start, count, padded);
+        FillUniforms(numbers, attempt, padded);
+        MakeNormal(padded);
+        TestAgainstLogarithms(padded);
+        double* values = Normals;
+        double* accepted = Uniforms;
+        for (int k = 0; k < count; k++)
+        {
+            int value = _pending[start + k];
+            target[value] = values[k];
+            _pending[left] = value;
+            left += accepted[k] != 0 ? 0 : 1;
+        }
+
+        return left;
+    }
+
+    /// <summary>Trials, items and shapes of pending values side by side; the last is repeated to fill a vector.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private void Gather(in ItemStream numbers, double* shape, int start, int count, int padded)
+    {
+        for (int k = 0; k < padded; k++)
+        {
+            int value = _pending[start + Math.Min(k, count - 1)];
+            (int row, int trial) = Math.DivRem(value, _trials);
+            Trials[k] = BitConverter.Int64BitsToDouble(numbers.FirstTrial + trial);
+            Items[k] = BitConverter.Int64BitsToDouble(numbers.Item + row);
+            Shapes[k] = shape[value];
+        }
     }
 
     [MethodImpl(MethodImplOptions.NoInlining)]
-    private static ulong Test(in ItemStream numbers, V index, int attempt, V a, double* values)
+    private void FillUniforms(in ItemStream numbers, int attempt, int count)
     {
-        numbers.Generate(index, attempt, out V c0, out V c1, out V c2, out V c3);
-        V z = NormalFunctions.QuantileOfOpenUniform(Uniform.Open(c0, c1));
-        V d = Offset(a, V.LessThan(a, V.Create(1)));
-        V.Store(Candidate(d, z, out V y), values);
-        V cube = Cube(y);
-        V h = V.FusedMultiplyAdd(V.Create(0.5) * z, z, d * (V.Create(1) - cube + Elementary.Log(cube)));
-        return V.SignBits(V.LessThan(V.Create(-1), y) & V.LessThan(Elementary.Log(Uniform.Open(c2, c3)), h));
+        for (int k = 0; k < count; k += V.Count)
+        {
+            numbers.Generate(V.Load(Trials + k), V.Load(Items + k), attempt, out V c0, out V c1, out V c2, out V c3);
+            V.Store(Uniform.Open(c0, c1), Normals + k);
+            V.Store(Uniform.Open(c2, c3), Uniforms + k);
+        }
+    }
+
+    /// <summary>Replaces normals by candidates, and uniforms by 1 where the candidate is accepted, by 0 where it is not.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private void TestAgainstLogarithms(int count)
+    {
+        V one = V.Create(1);
+        for (int k = 0; k < count; k += V.Count)
+        {
+            V a = V.Load(Shapes + k);
+            V d = Offset(a, V.LessThan(a, one));
+            V z = V.Load(Normals + k);
+            V.Store(Candidate(d, z, out V y), Normals + k);
+            V cube = Cube(y);
+            V bound = V.FusedMultiplyAdd(V.Create(0.5) * z, z, d * (one - cube + Elementary.Log(cube)));
+
+            // A negative cube has no logarithm: the comparison with NaN is false, and the attempt is rejected as it should be.
+            V accepted = V.LessThan(Elementary.Log(V.Load(Uniforms + k)), bound);
+            V.Store(accepted & one, Uniforms + k);
+        }
     }
 
     /// <summary>Multiplies the values of shapes below 1 by U^(1/a), with a uniform that belongs to no attempt.</summary>
-    private static void Boost(in ItemStream numbers, double* shape, double* target, int trials)
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private void Boost(in ItemStream numbers, double* shape, double* target)
     {
         V one = V.Create(1);
-        for (int i = 0; i < trials; i += V.Count)
+        for (int i = 0; i < _trials; i += V.Count)
         {
             V a = V.Load(shape + i);
             V boosted = V.LessThan(a, one);

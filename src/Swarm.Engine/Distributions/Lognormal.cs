@@ -33,6 +33,8 @@ public sealed class Lognormal(double logMean, double logSd) : Distribution
         return new Lognormal(Elementary.Log(mean) - (0.5 * logVariance), Math.Sqrt(logVariance));
     }
 
+    internal override bool CanOverflow => !double.IsFinite(Elementary.Exp(logMean + (LargestNormal * logSd)));
+
     internal override void Fill(in DrawSlice slice, Span<double> destination) =>
         UniformKernel.Fill(slice, new Transform(logMean, logSd), destination);
 

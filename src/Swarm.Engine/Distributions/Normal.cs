@@ -18,6 +18,8 @@ public sealed class Normal(double mean, double sd) : Distribution
     /// <inheritdoc/>
     public override double Skewness => 0;
 
+    internal override bool CanOverflow => !double.IsFinite(Math.Abs(mean) + (LargestNormal * sd));
+
     internal override void Fill(in DrawSlice slice, Span<double> destination) =>
         UniformKernel.Fill(slice, new Transform(mean, sd), destination);
 

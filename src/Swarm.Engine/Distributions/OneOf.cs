@@ -42,6 +42,8 @@ public sealed class OneOf : Distribution
     /// <inheritdoc/>
     public override double Skewness { get; }
 
+    internal override bool CanOverflow => false;
+
     internal override unsafe void Fill(in DrawSlice slice, Span<double> destination)
     {
         fixed (double* values = _values, cumulative = _cumulative)

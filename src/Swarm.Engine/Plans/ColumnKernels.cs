@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using Swarm.Engine.Numerics;
 
 namespace Swarm.Engine.Plans;
@@ -10,6 +11,7 @@ namespace Swarm.Engine.Plans;
 internal static unsafe class ColumnKernels<V>
     where V : unmanaged, ILanes<V>
 {
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public static void Unary<F>(Operand a, double* target, int trials)
         where F : IUnaryFunction
     {
@@ -22,6 +24,7 @@ internal static unsafe class ColumnKernels<V>
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public static void Binary<F>(Operand a, Operand b, double* target, int trials)
         where F : IBinaryFunction
     {
@@ -36,6 +39,7 @@ internal static unsafe class ColumnKernels<V>
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public static void Select(Operand condition, Operand a, Operand b, double* target, int trials)
     {
         for (int i = 0; i < trials; i += V.Count)
@@ -45,6 +49,7 @@ internal static unsafe class ColumnKernels<V>
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public static void Copy(Operand a, double* target, int trials)
     {
         for (int i = 0; i < trials; i += V.Count)
@@ -54,6 +59,7 @@ internal static unsafe class ColumnKernels<V>
     }
 
     /// <summary>The first trial whose value is not finite and whose condition, if there is one, is true; -1 if none.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public static int FirstFault(Operand a, Operand? condition, int trials)
     {
         V faults = V.Create(0);

@@ -38,8 +38,11 @@ public sealed class LocalRun
         ArgumentOutOfRangeException.ThrowIfLessThan(settings.Trials, 1);
         ArgumentOutOfRangeException.ThrowIfGreaterThan(settings.Trials, Streams.Counter.MaxTrials);
         ArgumentOutOfRangeException.ThrowIfLessThan(settings.Threads, 1);
-        return new LocalRun(new PreparedRun(model, settings), progress, cancellation).Execute();
+        return Execute(new PreparedRun(model, settings, []), progress, cancellation);
     }
+
+    internal static RunOutcome Execute(PreparedRun run, Action<RunProgress>? progress, CancellationToken cancellation) =>
+        new LocalRun(run, progress, cancellation).Execute();
 
     private RunOutcome Execute()
     {
@@ -97,7 +100,7 @@ public sealed class LocalRun
         lock (_lock)
         {
             _trialsDone += _run.TrialsOfLeaf(leaf);
-            _progress?.Invoke(new RunProgress(_trialsDone, _run.Settings.Trials, _reduction.Preview));
+            _progress?.Invoke(new RunProgress(_trialsDone, _run.Settings.Trials, outcome => _reduction.Preview(outcome, ErrorMethod.ClosedForm)));
         }
     }
 

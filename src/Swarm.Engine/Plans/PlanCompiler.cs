@@ -85,7 +85,11 @@ internal sealed class PlanCompiler
     {
         int step = Math.Max(instance.Step, 0);
         int register = _plan.AddDraw(new PlanDraw(draw.Distribution, StreamKey.Of(_seed, StreamRoles.Draw, draw.Stream), step));
-        _plan.Perform(OpCode.CheckFinite, register, Operation.None, AddSite(instance, []));
+        if (draw.Distribution.CanOverflow)
+        {
+            _plan.Perform(OpCode.CheckFinite, register, Operation.None, AddSite(instance, []));
+        }
+
         return register;
     }
 

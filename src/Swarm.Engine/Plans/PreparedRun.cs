@@ -1,5 +1,4 @@
 using Swarm.Engine.Models;
-using Swarm.Engine.Reserving.Simulation;
 using Swarm.Engine.Streams;
 using Swarm.Engine.Summaries;
 
@@ -8,12 +7,12 @@ namespace Swarm.Engine.Plans;
 /// <summary>A model made ready to run with a seed and a number of trials: what a thread or a worker needs to compute any leaf.</summary>
 internal sealed class PreparedRun
 {
-    public PreparedRun(Model model, RunSettings settings)
+    public PreparedRun(Model model, RunSettings settings, IReadOnlyList<Component> components)
     {
         Settings = settings;
         Shape = new RunShape(settings.Trials);
         Outcomes = ReportedOutcomes.Of(model);
-        Components = [.. model.Triangles.Select(triangle => TriangleModels.Component(triangle, settings.Seed))];
+        Components = components;
         Compiled = PlanCompiler.Compile(model, settings.Seed, Components, [.. Outcomes.Select(outcome => outcome.Instance)]);
     }
 

@@ -21,4 +21,16 @@ internal readonly unsafe record struct ItemStream(nint RoundKeys, long FirstTria
         c3 = V.CreateBits(Counter.Word3(Item, attempt));
         Philox4x32.Generate((ulong*)RoundKeys, ref c0, ref c1, ref c2, ref c3);
     }
+
+    /// <summary>As above, for another item in each lane; this stream's own item means nothing.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public void Generate<V>(V index, V item, int attempt, out V c0, out V c1, out V c2, out V c3)
+        where V : unmanaged, ILanes<V>
+    {
+        c0 = index;
+        c1 = Counter.Word1(index, Step);
+        c2 = item;
+        c3 = V.ShiftRight(item, 32) | V.CreateBits(Counter.Word3(0, attempt));
+        Philox4x32.Generate((ulong*)RoundKeys, ref c0, ref c1, ref c2, ref c3);
+    }
 }

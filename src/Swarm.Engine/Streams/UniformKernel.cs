@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using Swarm.Engine.Numerics;
 
 namespace Swarm.Engine.Streams;
@@ -46,6 +47,7 @@ internal static unsafe class UniformKernel
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private static void FillUniforms<V>(DrawSlice slice, double* group, int trials)
         where V : unmanaged, ILanes<V>
     {
@@ -70,6 +72,7 @@ internal static unsafe class UniformKernel
     }
 
     /// <summary>A loop of its own: one copy of a long transform is all that the compiler is willing to inline.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private static void Transform<V, T>(T transform, double* values, int trials)
         where V : unmanaged, ILanes<V>
         where T : unmanaged, IUniformTransform

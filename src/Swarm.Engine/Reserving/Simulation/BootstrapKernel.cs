@@ -11,7 +11,7 @@ internal sealed unsafe class BootstrapKernel<V> : ComponentKernel
     where V : unmanaged, ILanes<V>
 {
     // Ten cumulative columns of a kibibyte and their neighbours stay in the first cache.
-    private const int Run = 512;
+    private const int Run = 256;
 
     // The engine stops a run long before this many attempts are ever needed.
     private const int MaxAttempts = 10_000;

@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using Swarm.Engine.Distributions;
 using Swarm.Engine.Numerics;
 using Swarm.Engine.Streams;
@@ -5,53 +6,101 @@ using Swarm.Engine.Streams;
 namespace Swarm.Engine.Reserving.Simulation;
 
 /// <summary>
-/// Draws the amount of one future cell from its conditional mean m: gamma or over-dispersed Poisson with variance scale times
-/// |m|. A negative mean gives minus the amount of its absolute value.
+/// Draws the amounts of future cells from their conditional means m: gamma or over-dispersed Poisson with variance scale times
+/// |m|. A negative mean gives minus the amount of its absolute value. Cells are drawn a batch at a time, since what the gamma's
+/// first pass leaves over fills whole vectors only across cells.
 /// </summary>
 internal sealed unsafe class FutureCellKernel<V> : IDisposable
     where V : unmanaged, ILanes<V>
 {
+    // Three columns a cell: a batch of 48 cells of 256 trials stays in the second cache.
+    public const int MaxCells = 48;
+
     private readonly ProcessError _process;
     private readonly int _trials;
-    private readonly ColumnMemory _columns;
-    private readonly int[] _pending;
+    private readonly ColumnMemory _means;
+    private readonly ColumnMemory _sizes;
+    private readonly ColumnMemory _amounts;
+    private readonly GammaKernel<V> _gamma;
 
     public FutureCellKernel(ProcessError process, int trials)
     {
         _process = process;
         _trials = trials;
-        _columns = new ColumnMemory(4, trials);
-        _pending = new int[trials];
+        _means = new ColumnMemory(MaxCells, trials);
+        _sizes = new ColumnMemory(MaxCells, trials);
+        _amounts = new ColumnMemory(MaxCells, trials);
+        _gamma = new GammaKernel<V>(MaxCells, trials);
     }
 
-    /// <summary>Replaces conditional means by amounts.</summary>
-    public void Draw(in ItemStream numbers, double scale, double* cell)
+    /// <summary>Conditional means of a cell of the batch, to be written by the caller.</summary>
+    public double* Mean(int cell) => _means[cell];
+
+    /// <summary>Amounts of a cell of the batch after <see cref="Draw"/>.</summary>
+    public double* Amount(int cell) => _amounts[cell];
+
+    /// <summary>Draws a batch.</summary>
+    /// <param name="numbers">Which random numbers; the item is that of the first cell.</param>
+    /// <param name="scales">Scale of each cell.</param>
+    public void Draw(in ItemStream numbers, ReadOnlySpan<double> scales)
     {
-        double* size = _columns[0];
-        double* unit = _columns[1];
-        for (int t = 0; t < _trials; t += V.Count)
+        for (int cell = 0; cell < scales.Length; cell++)
         {
-            V.Store(V.Abs(V.Load(cell + t)) / V.Create(scale), size + t);
+            Measure(cell, scales[cell]);
         }
 
-        fixed (int* pending = _pending)
+        if (_process == ProcessError.Gamma)
         {
-            if (_process == ProcessError.Gamma)
-            {
-                GammaKernel<V>.Fill(numbers, size, unit, _trials, _columns[2], pending);
-            }
-            else
-            {
-                PoissonKernel<V>.Fill(numbers, size, unit, _trials);
-            }
+            _gamma.Fill(numbers, scales.Length, _sizes[0], _amounts[0]);
+        }
+        else
+        {
+            DrawCounts(numbers, scales.Length);
         }
 
-        for (int t = 0; t < _trials; t += V.Count)
+        for (int cell = 0; cell < scales.Length; cell++)
         {
-            V sign = V.Load(cell + t) & V.Create(-0.0);
-            V.Store((V.Load(unit + t) * V.Create(scale)) | sign, cell + t);
+            Scale(cell, scales[cell]);
         }
     }
 
-    public void Dispose() => _columns.Dispose();
+    public void Dispose()
+    {
+        _means.Dispose();
+        _sizes.Dispose();
+        _amounts.Dispose();
+        _gamma.Dispose();
+    }
+
+    private void DrawCounts(in ItemStream numbers, int cells)
+    {
+        for (int cell = 0; cell < cells; cell++)
+        {
+            PoissonKernel<V>.Fill(numbers with { Item = numbers.Item + cell }, _sizes[cell], _amounts[cell], _trials);
+        }
+    }
+
+    /// <summary>Size in units of the scale: the gamma's shape, the count's mean.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private void Measure(int cell, double scale)
+    {
+        double* mean = _means[cell];
+        double* size = _sizes[cell];
+        for (int t = 0; t < _trials; t += V.Count)
+        {
+            V.Store(V.Abs(V.Load(mean + t)) / V.Create(scale), size + t);
+        }
+    }
+
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private void Scale(int cell, double scale)
+    {
+        double* mean = _means[cell];
+        double* amount = _amounts[cell];
+        for (int t = 0; t < _trials; t += V.Count)
+        {
+            V sign = V.Load(mean + t) & V.Create(-0.0);
+            V.Store((V.Load(amount + t) * V.Create(scale)) | sign, amount + t);
+        }
+    }
 }

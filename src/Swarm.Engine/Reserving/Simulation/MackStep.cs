@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using Swarm.Engine.Distributions;
 using Swarm.Engine.Numerics;
 using Swarm.Engine.Streams;
@@ -11,17 +12,18 @@ internal sealed unsafe class MackStep<V> : IDisposable
     private readonly ProcessError _process;
     private readonly int _trials;
     private readonly ColumnMemory _columns;
-    private readonly int[] _pending;
+    private readonly GammaKernel<V> _gamma;
 
     public MackStep(ProcessError process, int trials)
     {
         _process = process;
         _trials = trials;
-        _columns = new ColumnMemory(4, trials);
-        _pending = new int[trials];
+        _columns = new ColumnMemory(2, trials);
+        _gamma = new GammaKernel<V>(1, trials);
     }
 
     /// <summary>Draws a factor with a mean and a standard error, lognormal so that it stays above 0.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public void DrawFactor(in ItemStream numbers, double mean, double error, double* target)
     {
         double logVariance = Elementary.Log1p(error / mean * (error / mean));
@@ -51,8 +53,13 @@ internal sealed unsafe class MackStep<V> : IDisposable
         }
     }
 
-    public void Dispose() => _columns.Dispose();
+    public void Dispose()
+    {
+        _columns.Dispose();
+        _gamma.Dispose();
+    }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void Multiply(double* cumulative, double* factor)
     {
         for (int t = 0; t < _trials; t += V.Count)
@@ -62,6 +69,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
     }
 
     /// <summary>Shape f^2 C / sigma^2, scale sigma^2 / f.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void AdvanceGamma(in ItemStream numbers, double* factor, double sigma, double* cumulative)
     {
         double* shape = _columns[0];
@@ -73,17 +81,14 @@ internal sealed unsafe class MackStep<V> : IDisposable
             V.Store(f * f * V.Load(cumulative + t) / variance, shape + t);
         }
 
-        fixed (int* pending = _pending)
-        {
-            GammaKernel<V>.Fill(numbers, shape, unit, _trials, _columns[2], pending);
-        }
-
+        _gamma.Fill(numbers, 1, shape, unit);
         for (int t = 0; t < _trials; t += V.Count)
         {
             V.Store(V.Load(unit + t) * (variance / V.Load(factor + t)), cumulative + t);
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void AdvanceLognormal(in ItemStream numbers, double* factor, double sigma, double* cumulative)
     {
         V variance = V.Create(sigma * sigma);

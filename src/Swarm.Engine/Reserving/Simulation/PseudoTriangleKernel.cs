@@ -94,6 +94,7 @@ internal sealed unsafe class PseudoTriangleKernel<V> : IDisposable
     }
 
     /// <summary>Four picks from the pool a trial, as integers in the scratch columns.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void DrawPicks(ItemStream numbers, int attempt)
     {
         V size = V.CreateBits((ulong)_input.Pool.Length);
@@ -108,6 +109,7 @@ internal sealed unsafe class PseudoTriangleKernel<V> : IDisposable
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void LookUp(double* picks)
     {
         double* residuals = Residuals;
@@ -124,6 +126,7 @@ internal sealed unsafe class PseudoTriangleKernel<V> : IDisposable
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void Accumulate(int origin, int development, int cell)
     {
         double* cumulative = _cumulative[origin];
@@ -155,6 +158,7 @@ internal sealed unsafe class PseudoTriangleKernel<V> : IDisposable
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void FitFactor(int development)
     {
         double* factor = _factors[development];
@@ -169,6 +173,7 @@ internal sealed unsafe class PseudoTriangleKernel<V> : IDisposable
         }
     }
 
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void Replace(double* column, double* other)
     {
         for (int t = 0; t < _trials; t += V.Count)

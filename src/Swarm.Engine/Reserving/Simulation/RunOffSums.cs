@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using Swarm.Engine.Numerics;
 
 namespace Swarm.Engine.Reserving.Simulation;
@@ -31,6 +32,7 @@ internal sealed unsafe class RunOffSums<V> : IDisposable
     }
 
     /// <summary>Adds the amounts of a future cell.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public void Add(int origin, int development, double* cell)
     {
         double* unpaid = _sums[RunOffOutputs.Unpaid];
@@ -46,6 +48,7 @@ internal sealed unsafe class RunOffSums<V> : IDisposable
     }
 
     /// <summary>Adds the conditional means of a future cell.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public void AddExpected(double* cell)
     {
         double* sum = _sums[RunOffOutputs.Expected];
@@ -56,6 +59,7 @@ internal sealed unsafe class RunOffSums<V> : IDisposable
     }
 
     /// <summary>Writes the columns that are used, moved to the booked estimate.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining)]
     public void Write(double** outputs, int offset, int trials)
     {
         V scale = V.Create(_booking.Scale);

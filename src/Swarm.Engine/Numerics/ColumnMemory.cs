@@ -1,6 +1,6 @@
 using System.Runtime.InteropServices;
 
-namespace Swarm.Engine.Reserving.Simulation;
+namespace Swarm.Engine.Numerics;
 
 /// <summary>Columns of equal length on cache-line borders, for a kernel's working values.</summary>
 internal sealed unsafe class ColumnMemory : IDisposable
