@@ -28,6 +28,16 @@ public sealed record Model
     public IReadOnlyList<Outcome> Outcomes { get; init; } = [];
 }
 
+/// <summary>Ways to break a triangle's unpaid claims down.</summary>
+public enum Breakdown
+{
+    /// <summary>By origin period.</summary>
+    Origin,
+
+    /// <summary>By future calendar period: the payment pattern.</summary>
+    Calendar,
+}
+
 /// <summary>The unit of money.</summary>
 /// <param name="Unit">Its name, as in "crown".</param>
 /// <param name="Scale">How many units one shown unit stands for, as in 1000.</param>
@@ -94,6 +104,9 @@ public sealed record Outcome
 
     /// <summary>Thresholds whose exceedance probability is asked.</summary>
     public IReadOnlyList<double> Above { get; init; } = [];
+
+    /// <summary>Parts of a triangle's unpaid claims that are reported beside their total; empty for other outcomes.</summary>
+    public IReadOnlyList<Breakdown> By { get; init; } = [];
 
     /// <summary>True if a picture over steps is asked.</summary>
     public bool Fan { get; init; }

@@ -1,0 +1,71 @@
+using Swarm.Engine.Distributions;
+using Swarm.Engine.Models;
+using Swarm.Engine.Reserving;
+
+namespace Swarm.Engine.Tests.Models;
+
+/// <summary>Reads documents in tests, with two distributions and a triangle at hand.</summary>
+internal static class Documents
+{
+    public const string FileName = "model.yaml";
+
+    public static IReadOnlyList<DistributionForm> Forms { get; } =
+    [
+        new(
+            "normal",
+            [new("mean", ParameterKind.Number, "Mean."), new("sd", ParameterKind.Number, "Standard deviation, zero or more.")],
+            "Normal distribution.",
+            a => DistributionBinding.Of(
+                a.Number("sd") < 0 ? [new ParameterProblem("sd", "'sd' is negative", "write zero or more")] : [],
+                () => new Normal(a.Number("mean"), a.Number("sd")))),
+        new(
+            "lognormal",
+            [new("mean", ParameterKind.Number, "Mean."), new("sd", ParameterKind.Number, "Standard deviation.")],
+            "Lognormal distribution by its own moments.",
+            a => DistributionBinding.Of(Lognormal.OfMeanAndSd(a.Number("mean"), a.Number("sd")))),
+        new(
+            "lognormal",
+            [new("log_mean", ParameterKind.Number, "Mean of the logarithm."), new("log_sd", ParameterKind.Number, "Its standard deviation.")],
+            "Lognormal distribution by the moments of its logarithm.",
+            a => DistributionBinding.Of(new Lognormal(a.Number("log_mean"), a.Number("log_sd")))),
+        new(
+            "one_of",
+            [new("values", ParameterKind.Numbers, "Values."), new("chances", ParameterKind.Numbers, "Their chances.")],
+            "One of several values.",
+            a => DistributionBinding.Of(new OneOf(a.Numbers("values"), a.Numbers("chances")))),
+    ];
+
+    /// <summary>Three origin years with 3, 2 and 1 known developments, whatever the file says.</summary>
+    public static Triangle Triangle { get; } = new(["2023", "2024", "2025"], [[100, 50, 10], [110, 55], [120]], 12);
+
+    public static ModelReading Read(string text) => Read(text, _ => (Triangle, []));
+
+    public static ModelReading Read(
+        string text, Func<TriangleRequest, (Triangle? Triangle, IReadOnlyList<Diagnostic> Diagnostics)> triangles) =>
+        ModelReader.Read(FileName, text, name => name.EndsWith(".csv", StringComparison.Ordinal) ? new DataFile(name, [1, 2, 3]) : null, Forms, triangles);
+
+    /// <summary>A document of formulas, one a line, of which <c>x</c> is reported.</summary>
+    public static string OfFormulas(params string[] formulas) =>
+        $"""
+        model: test
+        horizon: 5
+        draws:
+          a: normal(mean=0, sd=1)
+          d[t]: normal(mean=0, sd=1)
+        formulas:
+        {string.Join('\n', formulas.Select(line => "  " + line))}
+        outcomes:
+          x: 
+        """;
+
+    /// <summary>The model, which must have no error.</summary>
+    public static Model Accepted(string text)
+    {
+        ModelReading reading = Read(text);
+        Assert.True(reading.Model is not null, string.Join('\n', reading.Diagnostics));
+        return reading.Model;
+    }
+
+    /// <summary>Errors and warnings as lines.</summary>
+    public static string[] Told(string text) => [.. Read(text).Diagnostics.Select(d => d.ToString())];
+}
