@@ -44,4 +44,22 @@ public sealed class Triangle
 
         return sum;
     }
+
+    /// <summary>Amount to date of an origin: its cell on the latest diagonal, or the last column's.</summary>
+    public double Latest(int origin) => Cumulative(origin, Known(origin) - 1);
+
+    /// <summary>Number of origins that are known at a development period; always the oldest ones.</summary>
+    public int RowsAt(int development)
+    {
+        int rows = 0;
+        while (rows < Origins.Count && Known(rows) > development)
+        {
+            rows++;
+        }
+
+        return rows;
+    }
+
+    /// <summary>A cell's name in messages, with the development period's number from 1.</summary>
+    internal string CellName(int origin, int development) => $"origin {Origins[origin]}, development {development + 1}";
 }
