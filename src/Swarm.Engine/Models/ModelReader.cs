@@ -10,6 +10,13 @@ namespace Swarm.Engine.Models;
 /// <summary>Reads a model document: YAML in, a fully checked model or all that is wrong with it out.</summary>
 public static class ModelReader
 {
+    /// <summary>Reads a document with every distribution and data format that the engine knows.</summary>
+    /// <param name="fileName">Name of the document for messages.</param>
+    /// <param name="text">Its text.</param>
+    /// <param name="data">Finds a data file by the name that the model writes; null if there is none.</param>
+    public static ModelReading Read(string fileName, string text, Func<string, DataFile?> data) =>
+        Read(fileName, text, data, DistributionCatalogue.Forms, _ => (null, []));
+
     /// <summary>Reads a document.</summary>
     /// <param name="fileName">Name of the document for messages.</param>
     /// <param name="text">Its text.</param>

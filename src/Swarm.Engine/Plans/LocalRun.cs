@@ -41,7 +41,7 @@ public sealed class LocalRun
         ArgumentOutOfRangeException.ThrowIfLessThan(settings.Trials, 1);
         ArgumentOutOfRangeException.ThrowIfGreaterThan(settings.Trials, Streams.Counter.MaxTrials);
         ArgumentOutOfRangeException.ThrowIfLessThan(settings.Threads, 1);
-        return Execute(new PreparedRun(model, settings, []), progress, cancellation);
+        return Execute(new PreparedRun(model, settings), progress, cancellation);
     }
 
     internal static RunOutcome Execute(PreparedRun run, Action<RunProgress>? progress, CancellationToken cancellation) =>

@@ -7,6 +7,11 @@ namespace Swarm.Engine.Plans;
 /// <summary>A model made ready to run with a seed and a number of trials: what a thread or a worker needs to compute any leaf.</summary>
 internal sealed class PreparedRun
 {
+    public PreparedRun(Model model, RunSettings settings)
+        : this(model, settings, TriangleModels.Components(model, settings.Seed))
+    {
+    }
+
     public PreparedRun(Model model, RunSettings settings, IReadOnlyList<Component> components)
     {
         Settings = settings;

@@ -1,5 +1,6 @@
 using System.Globalization;
 using Swarm.Engine.Models;
+using Swarm.Engine.Reserving.Simulation;
 using Swarm.Engine.Summaries;
 
 namespace Swarm.Engine.Plans;
@@ -14,13 +15,13 @@ internal static class ReportedOutcomes
     {
         QuantityKind.PerStep => Steps(model, outcome),
         QuantityKind.AtStep => [Whole(outcome, outcome.Step)],
-        _ => [Whole(outcome, Instance.PerTrial)],
+        _ => [Whole(outcome, Instance.PerTrial), .. Parts(model, outcome)],
     };
 
     private static ReportedOutcome Whole(Outcome outcome, int step)
     {
         var instance = new Instance(outcome.Name, step);
-        return Report(outcome, instance, OutcomeGroup.Whole, instance.ToString(), "");
+        return Report(outcome, instance, OutcomeGroup.Whole, instance.ToString(), "", outcome.Above);
     }
 
     /// <summary>Every step, step 0 included where the quantity has one.</summary>
@@ -34,12 +35,45 @@ internal static class ReportedOutcomes
             new Instance(outcome.Name, step),
             OutcomeGroup.Step,
             $"{outcome.Name}[t]",
-            step.ToString(CultureInfo.InvariantCulture)));
+            step.ToString(CultureInfo.InvariantCulture),
+            outcome.Above));
     }
 
-    private static ReportedOutcome Report(Outcome outcome, Instance instance, OutcomeGroup group, string parent, string label)
+    /// <summary>What a triangle's unpaid claims are made of, as far as the model asks for it, and their conditional mean.</summary>
+    private static IEnumerable<ReportedOutcome> Parts(Model model, Outcome outcome)
     {
-        var request = new OutcomeRequest(instance.ToString(), outcome.Adverse, outcome.Levels, outcome.Above);
+        if (model.Triangles.FirstOrDefault(input => $"{input.Name}.unpaid" == outcome.Name) is not { } input)
+        {
+            yield break;
+        }
+
+        var names = new TriangleNames(input.Name, input.Triangle, new RunOffShape(input.Triangle, TriangleModels.TailPeriods(input)));
+        if (outcome.By.Contains(Breakdown.Origin))
+        {
+            foreach (string origin in input.Triangle.Origins)
+            {
+                yield return Part(outcome, names.Unpaid(origin), OutcomeGroup.Origin, origin);
+            }
+        }
+
+        if (outcome.By.Contains(Breakdown.Calendar))
+        {
+            foreach (string period in names.FuturePeriods)
+            {
+                yield return Part(outcome, names.Paid(period), OutcomeGroup.Calendar, period);
+            }
+        }
+
+        yield return Part(outcome, names.Expected, OutcomeGroup.Expected, "");
+    }
+
+    private static ReportedOutcome Part(Outcome outcome, string name, OutcomeGroup group, string label) =>
+        Report(outcome, new Instance(name, Instance.PerTrial), group, outcome.Name, label, []);
+
+    private static ReportedOutcome Report(
+        Outcome outcome, Instance instance, OutcomeGroup group, string parent, string label, IReadOnlyList<double> thresholds)
+    {
+        var request = new OutcomeRequest(instance.ToString(), outcome.Adverse, outcome.Levels, thresholds);
         return new ReportedOutcome(request, instance, group, parent, label, outcome.IsMoney);
     }
 }

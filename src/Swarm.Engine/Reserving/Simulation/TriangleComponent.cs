@@ -7,16 +7,16 @@ namespace Swarm.Engine.Reserving.Simulation;
 internal sealed class TriangleComponent : Component
 {
     private readonly RunOffShape _shape;
-    private readonly string _latest;
+    private readonly TriangleNames _names;
     private readonly Func<LaneWidth, ComponentKernel> _createKernel;
 
     private TriangleComponent(string name, Triangle triangle, RunOffShape shape, Func<LaneWidth, ComponentKernel> createKernel)
         : base(name)
     {
         _shape = shape;
-        _latest = PeriodLabel.LatestCalendar(triangle);
+        _names = new TriangleNames(name, triangle, shape);
         _createKernel = createKernel;
-        Outputs = TriangleNames.Of(name, triangle, shape);
+        Outputs = _names.All;
     }
 
     /// <inheritdoc/>
@@ -27,8 +27,8 @@ internal sealed class TriangleComponent : Component
     {
         for (int step = 1; step <= horizon; step++)
         {
-            string? output = step <= _shape.FuturePeriods ? $"{Name}.paid.{PeriodLabel.Add(_latest, step)}" : null;
-            yield return ($"{Name}.paid", step, output);
+            string? output = step <= _shape.FuturePeriods ? _names.Paid(_names.FuturePeriod(step)) : null;
+            yield return (_names.PaidByStep, step, output);
         }
     }
 
