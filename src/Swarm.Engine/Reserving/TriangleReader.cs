@@ -1,3 +1,5 @@
+using Swarm.Engine.Models;
+
 namespace Swarm.Engine.Reserving;
 
 /// <summary>Reads a triangle from a CSV file.</summary>
@@ -7,6 +9,23 @@ namespace Swarm.Engine.Reserving;
 /// </remarks>
 public static class TriangleReader
 {
+    /// <summary>Reads the file that a model asks for.</summary>
+    public static (Triangle? Triangle, IReadOnlyList<Diagnostic> Diagnostics) Read(TriangleRequest request)
+    {
+        var format = new TriangleFormat
+        {
+            Amounts = request.Amounts,
+            Layout = request.Layout,
+            OriginColumn = request.OriginColumn,
+            DevelopmentColumn = request.DevelopmentColumn,
+            AmountColumn = request.AmountColumn,
+            MonthsPerPeriod = request.MonthsPerPeriod,
+            AsOf = request.AsOf,
+        };
+        TriangleReading reading = Read(request.FileName, request.Content, format);
+        return (reading.Triangle, reading.Diagnostics);
+    }
+
     /// <summary>Reads a file.</summary>
     /// <param name="file">Its name, for messages.</param>
     /// <param name="content">Its bytes, UTF-8.</param>
