@@ -6,12 +6,12 @@ namespace Swarm.Engine.Reserving;
 internal static class LongTable
 {
     /// <summary>The cells that could be read.</summary>
-    public static IReadOnlyList<TriangleCell> Read(IReadOnlyList<CsvField[]> rows, TriangleFormat format, TriangleFaults faults)
+    public static IReadOnlyList<TriangleCell> Read(IReadOnlyList<CsvField[]> rows, TriangleRequest request, TriangleFaults faults)
     {
         CsvField[] header = rows[0];
-        int origin = Find(header, format.OriginColumn, faults);
-        int development = Find(header, format.DevelopmentColumn, faults);
-        int amount = Find(header, format.AmountColumn, faults);
+        int origin = Find(header, request.OriginColumn, faults);
+        int development = Find(header, request.DevelopmentColumn, faults);
+        int amount = Find(header, request.AmountColumn, faults);
         List<TriangleCell> cells = [];
         if (origin < 0 || development < 0 || amount < 0)
         {

@@ -4,9 +4,9 @@ namespace Swarm.Engine.Reserving;
 internal static class TriangleAssembly
 {
     /// <summary>The triangle, or null after an error.</summary>
-    public static Triangle? Of(IReadOnlyList<TriangleCell> cells, TriangleFormat format, TriangleFaults faults)
+    public static Triangle? Of(IReadOnlyList<TriangleCell> cells, TriangleRequest request, TriangleFaults faults)
     {
-        int? months = MonthsOf(cells, format, faults);
+        int? months = MonthsOf(cells, request, faults);
         int? monthsPerAge = months is { } m ? MonthsPerAge(cells, m, faults) : null;
         if (months is null || monthsPerAge is null)
         {
@@ -19,22 +19,24 @@ internal static class TriangleAssembly
             return null;
         }
 
-        RunOffCheck.Check(grid, format.AsOf, faults);
-        return faults.HasErrors ? null : new Triangle(grid.Labels, grid.Increments(format.Amounts), months.Value);
+        RunOffCheck.Check(grid, request.AsOf, faults);
+        return faults.HasErrors ? null : new Triangle(grid.Labels, grid.Increments(request.Amounts), months.Value);
     }
 
-    private static int? MonthsOf(IReadOnlyList<TriangleCell> cells, TriangleFormat format, TriangleFaults faults)
+    private static int? MonthsOf(IReadOnlyList<TriangleCell> cells, TriangleRequest request, TriangleFaults faults)
     {
-        int months = format.MonthsPerPeriod ?? cells[0].Origin.Months;
+        int months = request.MonthsPerPeriod;
         TriangleCell? odd = cells.FirstOrDefault(cell => cell.Origin.Months != months);
         if (odd is null)
         {
             return months;
         }
 
-        string wanted = months == OriginPeriod.Yearly ? "years (2017)" : "quarters (2017Q3)";
+        (string period, string wanted, string other) =
+            months == OriginPeriod.Yearly ? ("year", "2017", "quarter") : ("quarter", "2017Q3", "year");
         faults.Error(
-            odd.Position, $"origin {odd.Origin} stands among periods of {months} months", $"give all origins as {wanted}");
+            odd.Position, $"origin {odd.Origin} is not a {period}",
+            $"write origins as {wanted}, or period: {other} in the model if all are {other}s");
         return null;
     }
 

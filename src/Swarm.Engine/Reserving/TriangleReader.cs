@@ -4,8 +4,8 @@ namespace Swarm.Engine.Reserving;
 
 /// <summary>Reads a triangle from a CSV file.</summary>
 /// <remarks>
-/// Fields are separated by the first of tab, semicolon, comma and bar that the header holds. Empty lines and lines that begin with
-/// # are left out. The order of rows and columns means nothing.
+/// UTF-8; fields are separated by the first of tab, semicolon, comma and bar that the header holds. Empty lines and lines that
+/// begin with # are left out. The order of rows and columns means nothing.
 /// </remarks>
 public static class TriangleReader
 {
@@ -27,56 +27,42 @@ public static class TriangleReader
     }
 
     /// <summary>Reads a file.</summary>
-    /// <param name="file">Its name, for messages.</param>
-    /// <param name="content">Its bytes, UTF-8.</param>
-    /// <param name="format">How it is to be read.</param>
-    /// <returns>The triangle, or all errors with their places.</returns>
-    public static TriangleReading Read(string file, ReadOnlySpan<byte> content, TriangleFormat format)
+    /// <param name="request">The file and how it is to be read.</param>
+    /// <returns>The triangle, or null after an error; all errors and warnings, in the order of the file.</returns>
+    public static (Triangle? Triangle, IReadOnlyList<Diagnostic> Diagnostics) Read(TriangleRequest request)
     {
-        var faults = new TriangleFaults(file);
-        IReadOnlyList<CsvField[]> rows = CsvTable.Read(content, faults);
-        Triangle? triangle = rows.Count == 0 ? null : Read(rows, format, faults);
-        return new TriangleReading(faults.HasErrors ? null : triangle, faults.InOrder());
+        var faults = new TriangleFaults(request.FileName);
+        IReadOnlyList<CsvField[]> rows = CsvTable.Read(request.Content, faults);
+        Triangle? triangle = rows.Count > 0 && IsHeaderGood(rows, request, faults) ? Read(rows, request, faults) : null;
+        return (faults.HasErrors ? null : triangle, faults.InOrder());
     }
 
-    private static Triangle? Read(IReadOnlyList<CsvField[]> rows, TriangleFormat format, TriangleFaults faults)
+    private static Triangle? Read(IReadOnlyList<CsvField[]> rows, TriangleRequest request, TriangleFaults faults)
     {
-        IReadOnlyList<TriangleCell>? cells = LayoutOf(rows[0], format) switch
-        {
-            TriangleLayout.Long => LongTable.Read(rows, format, faults),
-            TriangleLayout.Square => SquareTable.Read(rows, faults),
-            _ => null,
-        };
-        if (cells is null)
-        {
-            faults.Error(
-                rows[0][0].Position,
-                $"the header {TriangleFaults.Quote(string.Join(", ", rows[0].Select(field => field.Text)))} is of neither form",
-                $"give the columns {format.OriginColumn}, {format.DevelopmentColumn}, {format.AmountColumn}; or a square table: the "
-                + "origins first, then a column headed by each development (1, 2, 3 or 12, 24, 36)");
-            return null;
-        }
-
-        if (rows.Count == 1)
-        {
-            faults.Error(rows[0][0].Position, "there is a header but no row below it", "give a row for each cell or origin");
-            return null;
-        }
-
-        return cells.Count > 0 ? TriangleAssembly.Of(cells, format, faults) : null;
+        IReadOnlyList<TriangleCell> cells = request.Layout == TriangleLayout.Long
+            ? LongTable.Read(rows, request, faults)
+            : SquareTable.Read(rows, faults);
+        return cells.Count > 0 ? TriangleAssembly.Of(cells, request, faults) : null;
     }
 
-    private static TriangleLayout LayoutOf(CsvField[] header, TriangleFormat format)
+    private static bool IsHeaderGood(IReadOnlyList<CsvField[]> rows, TriangleRequest request, TriangleFaults faults)
     {
-        if (format.Layout != TriangleLayout.FromHeader)
+        CsvField[] header = rows[0];
+        bool isLong = LongTable.ColumnOf(header, request.OriginColumn) >= 0
+            && LongTable.ColumnOf(header, request.AmountColumn) >= 0;
+        if (request.Layout == TriangleLayout.Long && SquareTable.IsHeader(header))
         {
-            return format.Layout;
+            faults.Error(header[0].Position, "the header is that of a square table", "write layout: square in the model");
+        }
+        else if (request.Layout == TriangleLayout.Square && isLong)
+        {
+            faults.Error(header[0].Position, "the header is that of the long form", "write layout: long in the model");
+        }
+        else if (rows.Count == 1)
+        {
+            faults.Error(header[0].Position, "there is a header but no row below it", "give a row for each cell or origin");
         }
 
-        int named = new[] { format.OriginColumn, format.DevelopmentColumn, format.AmountColumn }
-            .Count(name => LongTable.ColumnOf(header, name) >= 0);
-        return named >= 2 ? TriangleLayout.Long
-            : SquareTable.IsHeader(header) ? TriangleLayout.Square
-            : TriangleLayout.FromHeader;
+        return !faults.HasErrors;
     }
 }
