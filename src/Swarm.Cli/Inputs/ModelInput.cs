@@ -18,7 +18,8 @@ internal sealed record ModelInput(RecordedModel Source, ModelReading Reading)
     {
         var text = File.ReadAllText(path, Encoding.UTF8);
         var folder = Path.GetDirectoryName(Path.GetFullPath(path)) ?? ".";
-        return new ModelInput(new RecordedModel(Path.GetFileName(path), text), ModelReader.Read(path, text, name => Data(folder, name)));
+        var reading = ModelReader.Read(path, text, name => Data(folder, name));
+        return new ModelInput(new RecordedModel(Path.GetFileName(path), text), reading);
     }
 
     /// <summary>The data files as they go into the run record.</summary>

@@ -23,6 +23,7 @@ internal static class RecordOfRun
             Data = input.Data(),
             Outcomes = outcome.Results,
             Notes = RunNotes.Of(model, outcome),
+            Tables = RunTables.Of(model, outcome),
         };
     }
 

@@ -9,6 +9,23 @@ namespace Swarm.Engine.Reserving;
 /// </remarks>
 public static class TriangleReader
 {
+    /// <summary>Reads the file that a model asks for.</summary>
+    public static (Triangle? Triangle, IReadOnlyList<Diagnostic> Diagnostics) Read(TriangleRequest request)
+    {
+        var format = new TriangleFormat
+        {
+            Amounts = request.Amounts,
+            Layout = request.Layout,
+            OriginColumn = request.OriginColumn,
+            DevelopmentColumn = request.DevelopmentColumn,
+            AmountColumn = request.AmountColumn,
+            MonthsPerPeriod = request.MonthsPerPeriod,
+            AsOf = request.AsOf,
+        };
+        TriangleReading reading = Read(request.FileName, request.Content, format);
+        return (reading.Triangle, reading.Diagnostics);
+    }
+
     /// <summary>Reads a file.</summary>
     /// <param name="request">The file and how it is to be read.</param>
     /// <returns>The triangle, or null after an error; all errors and warnings, in the order of the file.</returns>

@@ -24,29 +24,9 @@ public sealed record TriangleRequest
     /// <summary>Header of the amount column of a long table.</summary>
     public string AmountColumn { get; init; } = "amount";
 
-    /// <summary>12 for yearly, 3 for quarterly periods.</summary>
-    public int MonthsPerPeriod { get; init; } = 12;
+    /// <summary>12 for yearly, 3 for quarterly periods, or null to tell from the labels.</summary>
+    public int? MonthsPerPeriod { get; init; }
 
     /// <summary>The day that the latest diagonal stands for, or null where the model does not say.</summary>
     public DateOnly? AsOf { get; init; }
-}
-
-/// <summary>Layouts of a triangle's table.</summary>
-public enum TriangleLayout
-{
-    /// <summary>One line a cell: origin, development, amount.</summary>
-    Long,
-
-    /// <summary>One line an origin, one column a development.</summary>
-    Square,
-}
-
-/// <summary>What a triangle's amounts are.</summary>
-public enum TriangleAmounts
-{
-    /// <summary>Sums up to and with the development period.</summary>
-    Cumulative,
-
-    /// <summary>What fell in the development period.</summary>
-    Incremental,
 }
