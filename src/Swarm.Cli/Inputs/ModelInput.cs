@@ -1,8 +1,6 @@
 using System.Text;
-using Swarm.Engine.Distributions;
 using Swarm.Engine.Models;
 using Swarm.Engine.Records;
-using Swarm.Engine.Reserving;
 
 namespace Swarm.Cli.Inputs;
 
@@ -20,15 +18,12 @@ internal sealed record ModelInput(RecordedModel Source, ModelReading Reading)
     {
         var text = File.ReadAllText(path, Encoding.UTF8);
         var folder = Path.GetDirectoryName(Path.GetFullPath(path)) ?? ".";
-        var reading = ModelReader.Read(path, text, name => Data(folder, name), DistributionCatalogue.Forms, Triangle);
+        var reading = ModelReader.Read(path, text, name => Data(folder, name));
         return new ModelInput(new RecordedModel(Path.GetFileName(path), text), reading);
     }
 
     /// <summary>The data files as they go into the run record.</summary>
     public IReadOnlyList<RecordedData> Data() => [.. Reading.Data.Select(file => new RecordedData(file.Name, file.Content))];
-
-    private static (Triangle? Triangle, IReadOnlyList<Diagnostic> Diagnostics) Triangle(TriangleRequest request) =>
-        (null, [new Diagnostic(Severity.Error, new SourcePosition(request.FileName, 1, 1), "triangles cannot be read by this version", null)]);
 
     /// <summary>Null for a file that is not there or cannot be read: the reader says so at the place that names it.</summary>
     private static DataFile? Data(string folder, string name)

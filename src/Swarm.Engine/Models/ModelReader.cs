@@ -15,7 +15,7 @@ public static class ModelReader
     /// <param name="text">Its text.</param>
     /// <param name="data">Finds a data file by the name that the model writes; null if there is none.</param>
     public static ModelReading Read(string fileName, string text, Func<string, DataFile?> data) =>
-        Read(fileName, text, data, DistributionCatalogue.Forms, _ => (null, []));
+        Read(fileName, text, data, DistributionCatalogue.Forms, TriangleReader.Read);
 
     /// <summary>Reads a document.</summary>
     /// <param name="fileName">Name of the document for messages.</param>
