@@ -53,6 +53,13 @@ internal sealed class RunReport(RunRecord record, RunReportOptions options)
     private void WriteBlock(TextWriter output, ReportedResult outcome, ReportedResult? expected)
     {
         output.WriteLine();
+        if (Chance.Of(outcome.Result, outcome.IsMoney, options.Errors) is { } probability)
+        {
+            Paragraph.Write(output, Width, outcome.Result.Request.Name);
+            FigureBlock.Write(output, Width, probability);
+            return;
+        }
+
         Paragraph.Write(output, Width, TitleOf(outcome));
         ErrorParts? parts = expected is null ? null : ErrorParts.Of(outcome.Result, expected.Result, options.Errors);
         FigureBlock.Write(output, Width, Figures.Of(outcome.Result, options.Errors), parts);
