@@ -99,9 +99,9 @@ internal sealed class TrianglesSection(
     private TriangleInput Input(string name, SourcePosition position, Triangle triangle, MappingNode options)
     {
         ReservingOptions reserving = new ReservingOptionsReader(options, triangle, context.Diagnostics).Read();
-        RunOffShape shape = new(triangle, reserving.Tail?.Periods ?? 0);
-        context.Names.DeclareQuantities(
-            name, TriangleNames.Of(name, triangle, shape), perStep: context.Horizon == 0 ? [] : [$"{name}.paid"]);
+        RunOffShape shape = new(triangle, Fit(triangle, reserving, position)?.ChainLadder.TailPeriods ?? 0);
+        TriangleNames names = new(name, triangle, shape);
+        context.Names.DeclareQuantities(name, names.All, perStep: context.Horizon == 0 ? [] : [names.PaidByStep]);
         return new TriangleInput
         {
             Name = name,
@@ -110,5 +110,25 @@ internal sealed class TrianglesSection(
             Options = reserving,
             Position = position,
         };
+    }
+
+    /// <summary>The method is fitted here, too, so that a triangle that it cannot take is refused before anything runs.</summary>
+    private ReservingFit? Fit(Triangle triangle, ReservingOptions options, SourcePosition position)
+    {
+        List<Finding> findings = [];
+        ReservingFit? fit = ReservingFit.Of(triangle, options, findings);
+        foreach (Finding finding in findings)
+        {
+            if (finding.Severity == Severity.Error)
+            {
+                context.Diagnostics.Error(position, finding.Message, finding.Hint);
+            }
+            else
+            {
+                context.Diagnostics.Warning(position, finding.Message, finding.Hint);
+            }
+        }
+
+        return fit;
     }
 }
