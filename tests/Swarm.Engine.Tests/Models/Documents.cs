@@ -32,7 +32,11 @@ internal static class Documents
             "one_of",
             [new("values", ParameterKind.Numbers, "Values."), new("chances", ParameterKind.Numbers, "Their chances.")],
             "One of several values.",
-            a => DistributionBinding.Of(new OneOf(a.Numbers("values"), a.Numbers("chances")))),
+            a => DistributionBinding.Of(
+                a.Numbers("values").Count != a.Numbers("chances").Count
+                    ? [new ParameterProblem("chances", "'chances' and 'values' differ in length", "write one chance a value")]
+                    : [],
+                () => new OneOf(a.Numbers("values"), a.Numbers("chances")))),
     ];
 
     /// <summary>Three origin years with 3, 2 and 1 known developments, whatever the file says.</summary>
@@ -43,20 +47,6 @@ internal static class Documents
     public static ModelReading Read(
         string text, Func<TriangleRequest, (Triangle? Triangle, IReadOnlyList<Diagnostic> Diagnostics)> triangles) =>
         ModelReader.Read(FileName, text, name => name.EndsWith(".csv", StringComparison.Ordinal) ? new DataFile(name, [1, 2, 3]) : null, Forms, triangles);
-
-    /// <summary>A document of formulas, one a line, of which <c>x</c> is reported.</summary>
-    public static string OfFormulas(params string[] formulas) =>
-        $"""
-        model: test
-        horizon: 5
-        draws:
-          a: normal(mean=0, sd=1)
-          d[t]: normal(mean=0, sd=1)
-        formulas:
-        {string.Join('\n', formulas.Select(line => "  " + line))}
-        outcomes:
-          x: 
-        """;
 
     /// <summary>The model, which must have no error.</summary>
     public static Model Accepted(string text)

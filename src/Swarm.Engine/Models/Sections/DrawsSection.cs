@@ -34,6 +34,7 @@ internal static class DrawsSection
         {
             if (NameForm.Draw.Read(entry.Key.Text) is not QuantityName name)
             {
+                context.Names.Refuse(entry.Key.Text);
                 continue;
             }
 
