@@ -49,9 +49,9 @@ internal sealed class ReportOptions
         terminal.Out.Flush();
         if (parsed.GetValue(_plot) is not { } folder) return ExitCodes.Done;
         if (!Typeface.IsPresent) terminal.Tell("this machine has no fonts, so the pictures have no text; install one, such as fonts-dejavu-core");
-        return FileFaults.Guard(terminal, folder.FullName, () =>
+        return FileFaults.Guard(terminal, folder.ToString(), () =>
         {
-            foreach (var file in PlotFiles.Write(record, errors, folder.FullName, cancellation)) terminal.Tell($"picture {file}");
+            foreach (var file in PlotFiles.Write(record, errors, folder.ToString(), cancellation)) terminal.Tell($"picture {file}");
         });
     }
 }

@@ -78,8 +78,9 @@ internal sealed class RunCommand
         try
         {
             var outcome = await new WatchedRun(_terminal).ExecuteAsync(input.Reading.Model!, settings, cancellation);
-            if (outcome.Fault is not { } fault) return Report(parsed, input, settings, outcome, cancellation);
-            _terminal.Tell($"the run stopped at {fault}");
+            var reason = outcome.Fault is { } fault ? $"the run stopped at {fault}" : outcome.Refusal;
+            if (reason is null) return Report(parsed, input, settings, outcome, cancellation);
+            _terminal.Tell(reason);
             return ExitCodes.Fault;
         }
         catch (OperationCanceledException)

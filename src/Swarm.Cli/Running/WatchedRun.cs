@@ -19,7 +19,7 @@ internal sealed class WatchedRun(Terminal terminal)
         try
         {
             var outcome = await Task.Run(() => Run(model, settings, finished, cancellation), CancellationToken.None);
-            if (outcome.Fault is null) terminal.Tell(ProgressText.Closing(settings.Trials, terminal.Clock.GetElapsedTime(start)));
+            if (outcome is { Fault: null, Refusal: null }) terminal.Tell(ProgressText.Closing(settings.Trials, terminal.Clock.GetElapsedTime(start)));
             return outcome;
         }
         finally
