@@ -9,7 +9,7 @@ public sealed record TriangleRequest
     /// <summary>Its bytes.</summary>
     public required byte[] Content { get; init; }
 
-    /// <summary>How the table is laid out.</summary>
+    /// <summary>How the table is laid out; told from the header by default.</summary>
     public TriangleLayout Layout { get; init; }
 
     /// <summary>What the amounts are.</summary>
@@ -29,4 +29,27 @@ public sealed record TriangleRequest
 
     /// <summary>The day that the latest diagonal stands for, or null where the model does not say.</summary>
     public DateOnly? AsOf { get; init; }
+}
+
+/// <summary>Layouts of a triangle's table.</summary>
+public enum TriangleLayout
+{
+    /// <summary>As the header says.</summary>
+    FromHeader,
+
+    /// <summary>One line a cell: origin, development, amount.</summary>
+    Long,
+
+    /// <summary>One line an origin, one column a development.</summary>
+    Square,
+}
+
+/// <summary>What a triangle's amounts are.</summary>
+public enum TriangleAmounts
+{
+    /// <summary>Sums up to and with the development period.</summary>
+    Cumulative,
+
+    /// <summary>What fell in the development period.</summary>
+    Incremental,
 }

@@ -9,9 +9,7 @@ namespace Swarm.Engine.Tests.Reserving.Simulation;
 internal static class TaylorAshe
 {
     public static Triangle Triangle { get; } = TriangleReader.Read(
-        "taylor-ashe.csv",
-        File.ReadAllBytes(TestFile.Path("taylor-ashe.csv")),
-        new TriangleFormat { Amounts = TriangleAmounts.Cumulative }).Triangle!;
+        new TriangleRequest { FileName = "taylor-ashe.csv", Content = File.ReadAllBytes(TestFile.Path("taylor-ashe.csv")) }).Triangle!;
 
     /// <summary>Figures by quantity: <c>t.unpaid</c>, <c>t.unpaid.7</c>, <c>t.expected</c>, <c>t.paid.12</c>.</summary>
     public static Dictionary<string, OutcomeFigures> Figures(ReservingOptions options, long trials, ulong seed = 1) =>
