@@ -14,7 +14,7 @@ internal sealed class RunReport(RunRecord record, RunReportOptions options)
     {
         WriteHead(output);
         foreach (var family in Families()) WriteFamily(output, family);
-        foreach (var table in record.Tables.Where(table => options.Full || table.Code != ReportTableCodes.Residuals))
+        foreach (var table in record.Tables.Where(table => options.Full || !ReportTableCodes.IsDiagnostic(table.Code)))
         {
             output.WriteLine();
             ReportTableText.Write(output, Width, table);

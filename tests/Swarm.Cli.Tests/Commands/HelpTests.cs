@@ -1,3 +1,5 @@
+using System.CommandLine;
+
 namespace Swarm.Cli.Tests.Commands;
 
 public sealed class HelpTests : IDisposable
@@ -17,7 +19,7 @@ public sealed class HelpTests : IDisposable
 
         var code = await _swarm.RunAsync([.. words, "--help"]);
 
-        var help = _swarm.Out.TrimEnd().Split(Environment.NewLine).Select(line => line.TrimEnd()).ToArray();
+        var help = _swarm.Out.Replace(RootCommand.ExecutableName, "swarm", StringComparison.Ordinal).TrimEnd().Split(Environment.NewLine).Select(line => line.TrimEnd()).ToArray();
         var approved = Path.Combine(AppContext.BaseDirectory, "Data", $"help-{command.Replace(' ', '-')}.txt");
         Assert.Equal(0, code);
         Assert.All(help, line => Assert.InRange(line.Length, 0, 80));

@@ -53,8 +53,8 @@ public sealed class RunReportTests(SampleRecord sample) : IClassFixture<SampleRe
         Assert.Contains("fund[t] by step (low values hurt: VaR and TVaR look at the lower tail)", brief);
         Assert.DoesNotContain("motor.unpaid.2023", brief);
         Assert.Contains("motor.unpaid.2023", full);
-        Assert.DoesNotContain("motor: scaled Pearson residuals by cell", brief);
-        Assert.Contains("motor: scaled Pearson residuals by cell", full);
+        Assert.DoesNotContain("motor: scaled residuals by cell", brief);
+        Assert.Contains("motor: scaled residuals by cell", full);
     }
 
     [Fact]
