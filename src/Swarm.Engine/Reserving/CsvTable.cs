@@ -1,5 +1,6 @@
 using System.Text;
 using nietras.SeparatedValues;
+using Swarm.Engine.Models;
 
 namespace Swarm.Engine.Reserving;
 
@@ -75,9 +76,18 @@ internal static class CsvTable
         using SepReader reader = Sep.New(separator)
             .Reader(o => o with { HasHeader = false, DisableColCountCheck = true, Unescape = false })
             .FromText(text);
+        // Counted here: the reader's own line number is one too high for the first row.
+        int line = 1;
         foreach (SepReader.Row row in reader)
         {
-            CsvField[] fields = FieldsOf(row, faults);
+            CsvField[] fields = FieldsOf(row, line, faults);
+            line++;
+            if (row.Span.Contains('\n'))
+            {
+                faults.Error(QuotePosition(row, fields), "a quote opens a field that does not end on its line", "close the quote");
+                return [];
+            }
+
             if (fields.Length > 1 || fields[0].Text.Length > 0)
             {
                 rows.Add(fields);
@@ -87,7 +97,7 @@ internal static class CsvTable
         return rows;
     }
 
-    private static CsvField[] FieldsOf(SepReader.Row row, TriangleFaults faults)
+    private static CsvField[] FieldsOf(SepReader.Row row, int line, TriangleFaults faults)
     {
         var fields = new CsvField[row.ColCount];
         int start = 1;
@@ -96,16 +106,22 @@ internal static class CsvTable
             ReadOnlySpan<char> raw = row[k].Span;
             ReadOnlySpan<char> trimmed = raw.TrimStart();
             int column = trimmed.Length > 0 ? start + raw.Length - trimmed.Length : start;
-            fields[k] = new CsvField(Unquote(trimmed.TrimEnd()), faults.At(row.LineNumberFrom, column));
-            if (raw.Contains('\n'))
-            {
-                faults.Error(fields[k].Position, "a quote opens a field that does not end on its line", "close the quote");
-            }
-
+            fields[k] = new CsvField(Unquote(trimmed.TrimEnd()), faults.At(line, column));
             start += raw.Length + 1;
         }
 
         return fields;
+    }
+
+    private static SourcePosition QuotePosition(SepReader.Row row, CsvField[] fields)
+    {
+        int k = 0;
+        while (!row[k].Span.Contains('\n'))
+        {
+            k++;
+        }
+
+        return fields[k].Position;
     }
 
     private static string Unquote(ReadOnlySpan<char> field) =>

@@ -10,14 +10,13 @@ internal readonly record struct OriginPeriod(int Number, int Months)
     public const int Yearly = 12;
     public const int Quarterly = 3;
 
-    private const int LeastYear = 1_000;
     private const int YearDigits = 4;
     private const int QuartersPerYear = 4;
 
     /// <summary>The label: 2017 or 2017Q3.</summary>
     public override string ToString() => Months == Yearly
-        ? Number.ToString("0000", CultureInfo.InvariantCulture)
-        : string.Create(CultureInfo.InvariantCulture, $"{Number / QuartersPerYear:0000}Q{(Number % QuartersPerYear) + 1}");
+        ? Number.ToString(CultureInfo.InvariantCulture)
+        : string.Create(CultureInfo.InvariantCulture, $"{Number / QuartersPerYear}Q{(Number % QuartersPerYear) + 1}");
 
     /// <summary>The period in which a date lies.</summary>
     public static OriginPeriod Of(DateOnly date, int months) => months == Yearly
@@ -29,20 +28,18 @@ internal readonly record struct OriginPeriod(int Number, int Months)
         ? new DateOnly(Number, 12, 31)
         : LastDayOf(Number / QuartersPerYear, ((Number % QuartersPerYear) + 1) * Quarterly);
 
-    /// <summary>Reads 2017 or 2017Q3; null for anything else.</summary>
+    /// <summary>Reads 2017 or 2017Q3, and a plain number such as 7 for years that are only numbered; null for anything else.</summary>
     public static OriginPeriod? Parse(string text)
     {
-        bool isYear = text.Length == YearDigits;
         bool isQuarter = text.Length == YearDigits + 2 && text[YearDigits] is 'Q' or 'q' && text[^1] is >= '1' and <= '4';
-        if ((!isYear && !isQuarter) || !text.Take(YearDigits).All(char.IsAsciiDigit))
+        ReadOnlySpan<char> digits = isQuarter ? text.AsSpan(0, YearDigits) : text;
+        if (digits.Length is 0 or > YearDigits || digits[0] == '0' || digits.ContainsAnyExceptInRange('0', '9'))
         {
             return null;
         }
 
-        int year = int.Parse(text.AsSpan(0, YearDigits), NumberStyles.None, CultureInfo.InvariantCulture);
-        return year < LeastYear ? null
-            : isYear ? new OriginPeriod(year, Yearly)
-            : new OriginPeriod((year * QuartersPerYear) + text[^1] - '1', Quarterly);
+        int year = int.Parse(digits, NumberStyles.None, CultureInfo.InvariantCulture);
+        return isQuarter ? new OriginPeriod((year * QuartersPerYear) + text[^1] - '1', Quarterly) : new OriginPeriod(year, Yearly);
     }
 
     private static DateOnly LastDayOf(int year, int month) => new(year, month, DateTime.DaysInMonth(year, month));

@@ -25,7 +25,7 @@ internal static class TriangleAssembly
 
     private static int? MonthsOf(IReadOnlyList<TriangleCell> cells, TriangleRequest request, TriangleFaults faults)
     {
-        int months = request.MonthsPerPeriod;
+        int months = request.MonthsPerPeriod ?? cells[0].Origin.Months;
         TriangleCell? odd = cells.FirstOrDefault(cell => cell.Origin.Months != months);
         if (odd is null)
         {

@@ -16,36 +16,53 @@ public static class TriangleReader
     {
         var faults = new TriangleFaults(request.FileName);
         IReadOnlyList<CsvField[]> rows = CsvTable.Read(request.Content, faults);
-        Triangle? triangle = rows.Count > 0 && IsHeaderGood(rows, request, faults) ? Read(rows, request, faults) : null;
+        Triangle? triangle = rows.Count == 0 ? null : Read(rows, request, faults);
         return (faults.HasErrors ? null : triangle, faults.InOrder());
     }
 
     private static Triangle? Read(IReadOnlyList<CsvField[]> rows, TriangleRequest request, TriangleFaults faults)
     {
-        IReadOnlyList<TriangleCell> cells = request.Layout == TriangleLayout.Long
+        TriangleLayout? layout = LayoutOf(rows[0], request, faults);
+        if (layout is null)
+        {
+            return null;
+        }
+
+        IReadOnlyList<TriangleCell> cells = layout == TriangleLayout.Long
             ? LongTable.Read(rows, request, faults)
             : SquareTable.Read(rows, faults);
+        if (rows.Count == 1)
+        {
+            faults.Error(rows[0][0].Position, "there is a header but no row below it", "give a row for each cell or origin");
+        }
+
         return cells.Count > 0 ? TriangleAssembly.Of(cells, request, faults) : null;
     }
 
-    private static bool IsHeaderGood(IReadOnlyList<CsvField[]> rows, TriangleRequest request, TriangleFaults faults)
+    private static TriangleLayout? LayoutOf(CsvField[] header, TriangleRequest request, TriangleFaults faults)
     {
-        CsvField[] header = rows[0];
-        bool isLong = LongTable.ColumnOf(header, request.OriginColumn) >= 0
-            && LongTable.ColumnOf(header, request.AmountColumn) >= 0;
-        if (request.Layout == TriangleLayout.Long && SquareTable.IsHeader(header))
+        string[] names = [request.OriginColumn, request.DevelopmentColumn, request.AmountColumn];
+        bool isLong = names.Count(name => LongTable.ColumnOf(header, name) >= 0) >= 2;
+        bool isSquare = !isLong && SquareTable.IsHeader(header);
+        switch (request.Layout)
         {
-            faults.Error(header[0].Position, "the header is that of a square table", "write layout: square in the model");
+            case TriangleLayout.FromHeader when isLong || isSquare:
+                return isLong ? TriangleLayout.Long : TriangleLayout.Square;
+            case TriangleLayout.FromHeader:
+                faults.Error(
+                    header[0].Position,
+                    $"the header {TriangleFaults.Quote(string.Join(", ", header.Select(field => field.Text)))} is of neither form",
+                    $"give the columns {string.Join(", ", names)}; or a square table: the origins first, then a column headed by each "
+                    + "development (1, 2, 3 or 12, 24, 36)");
+                return null;
+            case TriangleLayout.Long when isSquare:
+                faults.Error(header[0].Position, "the header is that of a square table", "write layout: square in the model");
+                return null;
+            case TriangleLayout.Square when isLong:
+                faults.Error(header[0].Position, "the header is that of the long form", "write layout: long in the model");
+                return null;
+            default:
+                return request.Layout;
         }
-        else if (request.Layout == TriangleLayout.Square && isLong)
-        {
-            faults.Error(header[0].Position, "the header is that of the long form", "write layout: long in the model");
-        }
-        else if (rows.Count == 1)
-        {
-            faults.Error(header[0].Position, "there is a header but no row below it", "give a row for each cell or origin");
-        }
-
-        return !faults.HasErrors;
     }
 }

@@ -9,7 +9,7 @@ public sealed record TriangleRequest
     /// <summary>Its bytes.</summary>
     public required byte[] Content { get; init; }
 
-    /// <summary>How the table is laid out.</summary>
+    /// <summary>How the table is laid out; told from the header by default.</summary>
     public TriangleLayout Layout { get; init; }
 
     /// <summary>What the amounts are.</summary>
@@ -24,8 +24,8 @@ public sealed record TriangleRequest
     /// <summary>Header of the amount column of a long table.</summary>
     public string AmountColumn { get; init; } = "amount";
 
-    /// <summary>12 for yearly, 3 for quarterly periods.</summary>
-    public int MonthsPerPeriod { get; init; } = 12;
+    /// <summary>12 for yearly, 3 for quarterly periods, or null to tell from the labels.</summary>
+    public int? MonthsPerPeriod { get; init; }
 
     /// <summary>The day that the latest diagonal stands for, or null where the model does not say.</summary>
     public DateOnly? AsOf { get; init; }
@@ -34,6 +34,9 @@ public sealed record TriangleRequest
 /// <summary>Layouts of a triangle's table.</summary>
 public enum TriangleLayout
 {
+    /// <summary>As the header says.</summary>
+    FromHeader,
+
     /// <summary>One line a cell: origin, development, amount.</summary>
     Long,
 

@@ -39,8 +39,11 @@ internal static class Documents
                 () => new OneOf(a.Numbers("values"), a.Numbers("chances")))),
     ];
 
-    /// <summary>Three origin years with 3, 2 and 1 known developments, whatever the file says.</summary>
-    public static Triangle Triangle { get; } = new(["2023", "2024", "2025"], [[100, 50, 10], [110, 55], [120]], 12);
+    /// <summary>Six origin years, whatever the file says.</summary>
+    public static Triangle Triangle { get; } = new(
+        ["2020", "2021", "2022", "2023", "2024", "2025"],
+        [[100, 60, 30, 14, 6, 2], [108, 58, 35, 12, 7], [97, 66, 28, 15], [121, 62, 36], [115, 75], [130]],
+        12);
 
     public static ModelReading Read(string text) => Read(text, _ => (Triangle, []));
 

@@ -40,7 +40,7 @@ public class TriangleSectionTests
 
         Assert.Equal(("motor", "cars"), (motor.Name, motor.Stream));
         Assert.Same(Documents.Triangle, motor.Triangle);
-        Assert.Equal([(0, 1)], motor.Options.Excluded);
+        Assert.Equal([(3, 1)], motor.Options.Excluded);
         ReservingOptions expected = new()
         {
             Method = ReservingMethod.OdpBootstrap,
@@ -129,9 +129,9 @@ public class TriangleSectionTests
 
     [Theory]
     [InlineData("motor.paid.2026", true)]
-    [InlineData("motor.paid.2029", true)]
+    [InlineData("motor.paid.2032", true)]
     [InlineData("motor.paid.2025", false)]
-    [InlineData("motor.paid.2030", false)]
+    [InlineData("motor.paid.2033", false)]
     [InlineData("motor.unpaid.2023", true)]
     [InlineData("motor.expected", true)]
     public void Payments_run_from_the_latest_diagonal_to_the_end_of_the_tail(string name, bool exists)
@@ -142,15 +142,15 @@ public class TriangleSectionTests
     }
 
     [Theory]
-    [InlineData("2023", "2024", 12, true)]
-    [InlineData("2023Q4", "2024Q1", 3, true)]
-    [InlineData("2023", "2024", 3, false)]
-    [InlineData("2023Q4", "2024Q5", 3, false)]
-    [InlineData("A", "B", 12, false)]
-    [InlineData("99999999999", "2024", 12, false)]
-    public void Origins_are_years_or_quarters(string first, string second, int monthsPerPeriod, bool isRight)
+    [InlineData("2023 2024 2025", 12, true)]
+    [InlineData("2023Q4 2024Q1 2024Q2", 3, true)]
+    [InlineData("2023 2024 2025", 3, false)]
+    [InlineData("2023Q4 2024Q5 2024Q6", 3, false)]
+    [InlineData("A B C", 12, false)]
+    [InlineData("99999999999 2024 2025", 12, false)]
+    public void Origins_are_years_or_quarters(string origins, int monthsPerPeriod, bool isRight)
     {
-        Triangle triangle = new([first, second], [[1, 2], [3]], monthsPerPeriod);
+        Triangle triangle = new(origins.Split(' '), [[100, 50, 10], [110, 60], [120]], monthsPerPeriod);
         string text = "model: m\ntriangles:\n  x: {data: x.csv, amounts: cumulative, method: mack}\noutcomes:\n  x.unpaid: {}";
 
         Assert.Equal(isRight, Documents.Read(text, _ => (triangle, [])).Model is not null);

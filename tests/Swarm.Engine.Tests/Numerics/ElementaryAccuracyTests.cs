@@ -10,7 +10,7 @@ public class ElementaryAccuracyTests
     [InlineData("expm1", 1.0)]
     [InlineData("log1p", 1.0)]
     [InlineData("pow", 1.0)]
-    [InlineData("normal-cdf", 4.0)]
+    [InlineData("normal-cdf", 5.0)]
     [InlineData("normal-quantile", 3.0)]
     public void Every_reference_value_is_met_within_the_stated_ulps(string name, double allowed)
     {

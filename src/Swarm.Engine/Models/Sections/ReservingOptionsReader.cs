@@ -9,6 +9,9 @@ namespace Swarm.Engine.Models.Sections;
 /// <param name="diagnostics">Where options that do not go together are told.</param>
 internal sealed class ReservingOptionsReader(MappingNode options, Triangle triangle, DiagnosticList diagnostics)
 {
+    /// <summary>True if nothing was wrong with the options.</summary>
+    public bool IsRight { get; private set; } = true;
+
     public ReservingOptions Read()
     {
         MappingNode? ratios = options.Mapping("link_ratios");
@@ -29,6 +32,12 @@ internal sealed class ReservingOptionsReader(MappingNode options, Triangle trian
         };
     }
 
+    private void Refuse(SourcePosition position, string message, string hint)
+    {
+        IsRight = false;
+        diagnostics.Error(position, message, hint);
+    }
+
     private static ProcessError Process(string? word) => word switch
     {
         "over_dispersed_poisson" => ProcessError.OverDispersedPoisson,
@@ -42,7 +51,7 @@ internal sealed class ReservingOptionsReader(MappingNode options, Triangle trian
         string unfit = isMack ? "over_dispersed_poisson" : "lognormal";
         if (options.Scalar("process") is { } process && process.Text == unfit)
         {
-            diagnostics.Error(
+            Refuse(
                 process.Position,
                 $"process '{unfit}' does not go with method '{(isMack ? "mack" : "odp_bootstrap")}'",
                 $"write gamma or {(isMack ? "lognormal" : "over_dispersed_poisson")}");
@@ -76,14 +85,14 @@ internal sealed class ReservingOptionsReader(MappingNode options, Triangle trian
                 return (origin, development - 1);
             }
 
-            diagnostics.Error(
+            Refuse(
                 cell.Position,
                 $"origin {label.Text} has no link ratio from development {development}",
                 triangle.Known(origin) > 1 ? $"its link ratios begin at developments 1 to {triangle.Known(origin) - 1}" : "it has no link ratio at all");
             return null;
         }
 
-        diagnostics.Error(
+        Refuse(
             label.Position,
             $"the triangle has no origin {DiagnosticList.Quote(label.Text)}",
             $"its origins are {triangle.Origins[0]} to {triangle.Origins[^1]}");
@@ -100,7 +109,7 @@ internal sealed class ReservingOptionsReader(MappingNode options, Triangle trian
         double? factor = tail.Number("factor");
         if (factor is null && tail.Entry("sd") is { } sd)
         {
-            diagnostics.Error(sd.Key.Position, "'sd' goes with 'factor'; a fitted tail has none of its own", "remove it");
+            Refuse(sd.Key.Position, "'sd' goes with 'factor'; a fitted tail has none of its own", "remove it");
         }
 
         if (factor < 1)

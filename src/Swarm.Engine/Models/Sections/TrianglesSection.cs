@@ -15,6 +15,9 @@ internal sealed class TrianglesSection(
     private const int MonthsPerQuarter = 3;
     private const int MonthsPerYear = 12;
 
+    // Options of a wrong structure read as if they were left out, which is no ground to judge the method on.
+    private readonly bool _structureIsRight = !context.Diagnostics.HasErrors;
+
     public IReadOnlyList<TriangleInput> Read(MappingNode root)
     {
         List<TriangleInput> triangles = [];
@@ -96,11 +99,27 @@ internal sealed class TrianglesSection(
             : label.Length == YearDigits + 2 && label[YearDigits] == 'Q' && label[^1] is >= '1' and <= '4');
     }
 
+    /// <summary>Fits the method once, so that a triangle that it cannot be used on is refused here and not by the run.</summary>
+    private void CheckFit(Triangle triangle, ReservingOptions options, SourcePosition position)
+    {
+        List<Finding> findings = [];
+        _ = ReservingFit.Of(triangle, options, findings);
+        foreach (Finding finding in findings)
+        {
+            context.Diagnostics.Add(finding.At(position));
+        }
+    }
+
     private TriangleInput Input(string name, SourcePosition position, Triangle triangle, MappingNode options)
     {
-        ReservingOptions reserving = new ReservingOptionsReader(options, triangle, context.Diagnostics).Read();
-        RunOffShape shape = new(triangle, Fit(triangle, reserving, position)?.ChainLadder.TailPeriods ?? 0);
-        TriangleNames names = new(name, triangle, shape);
+        ReservingOptionsReader reader = new(options, triangle, context.Diagnostics);
+        ReservingOptions reserving = reader.Read();
+        if (_structureIsRight && reader.IsRight)
+        {
+            CheckFit(triangle, reserving, position);
+        }
+
+        TriangleNames names = new(name, triangle, new RunOffShape(triangle, reserving.Tail?.Periods ?? 0));
         context.Names.DeclareQuantities(name, names.All, perStep: context.Horizon == 0 ? [] : [names.PaidByStep]);
         return new TriangleInput
         {
