@@ -55,11 +55,20 @@ internal sealed class RunCommand
 
     private Command Create()
     {
-        var command = new Command("run", "Simulate a model on this machine, show its figures, and keep a run record.") { _model, _trials, _seed, _threads, _out, _noRecord };
+        var command = new Command("run", "Simulate a model on this machine, show its figures, and keep a run record.")
+        {
+            _model,
+            _trials,
+            _seed,
+            _threads,
+            _out,
+            _noRecord,
+        };
         _report.AddTo(command);
         command.Validators.Add(result =>
         {
-            if (result.GetResult(_out) is not null && result.GetValue(_noRecord)) result.AddError("--out and --no-record exclude each other");
+            if (result.GetResult(_out) is not null && result.GetValue(_noRecord))
+                result.AddError("--out and --no-record exclude each other");
         });
         command.SetAction(RunAsync);
         return command;
