@@ -38,6 +38,15 @@ internal sealed class FigureBlock
         Paragraph.Write(output, width, $"{NumberText.Plain(figures.Min)} to {NumberText.Plain(figures.Max)}", "  least and greatest trial: ");
     }
 
+    /// <summary>Writes the one figure that an outcome of yes or no has.</summary>
+    public static void Write(TextWriter output, int width, Estimate probability)
+    {
+        var block = new FigureBlock();
+        block.Add("probability", FigureText.InPercent(probability), probability.Reason);
+        block._table.Write(output, width);
+        block.WriteReasons(output, width);
+    }
+
     private void Add(string name, Estimate figure) => Add(name, FigureText.Of(figure), figure.Reason);
 
     private void Add(string name, FigureText text, string? reason) =>

@@ -1,3 +1,4 @@
+using Swarm.Engine.Distributions;
 using Swarm.Engine.Models;
 
 namespace Swarm.Cli.Output;
@@ -28,7 +29,7 @@ internal static class ModelSummary
         foreach (var draw in draws)
         {
             var distribution = draw.Distribution;
-            table.Add(draw.Name.ToString(), distribution.GetType().Name, Number(distribution.Mean), Number(distribution.Sd), Number(distribution.Skewness));
+            table.Add(draw.Name.ToString(), NameOf(distribution), Number(distribution.Mean), Number(distribution.Sd), Number(distribution.Skewness));
         }
 
         table.Write(output, Width);
@@ -60,5 +61,9 @@ internal static class ModelSummary
         Paragraph.Write(output, Width, list, "  ");
     }
 
-    private static string Number(double value) => double.IsNaN(value) ? "none" : NumberText.AtPlace(value, NumberText.Magnitude(value) - 5);
+    private static string Number(double value) => double.IsNaN(value) ? "none" : NumberText.Plain(value);
+
+    /// <summary>The type's own name in plain words: OneOf is "one of".</summary>
+    private static string NameOf(Distribution distribution) => string.Concat(distribution.GetType().Name.Select(
+        (letter, i) => char.IsUpper(letter) && i > 0 ? $" {char.ToLowerInvariant(letter)}" : $"{char.ToLowerInvariant(letter)}"));
 }

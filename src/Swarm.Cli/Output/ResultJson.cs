@@ -64,6 +64,7 @@ internal sealed class ResultJson
         WriteFigure("mean", figures.Mean);
         WriteFigure("sd", figures.Sd);
         WriteFigure("skewness", figures.Skewness);
+        if (Chance.Of(outcome.Result, outcome.IsMoney, _errors) is { } probability) WriteFigure("probability", probability);
         WriteParts(outcome);
         WriteNumber("min", figures.Min);
         WriteNumber("max", figures.Max);

@@ -14,7 +14,7 @@ internal sealed class RunReport(RunRecord record, RunReportOptions options)
     {
         WriteHead(output);
         foreach (var family in Families()) WriteFamily(output, family);
-        foreach (var table in record.Tables.Where(table => options.Full || table.Code != ReportTableCodes.Residuals))
+        foreach (var table in record.Tables.Where(table => options.Full || !ReportTableCodes.IsDiagnostic(table.Code)))
         {
             output.WriteLine();
             ReportTableText.Write(output, Width, table);
@@ -53,6 +53,13 @@ internal sealed class RunReport(RunRecord record, RunReportOptions options)
     private void WriteBlock(TextWriter output, ReportedResult outcome, ReportedResult? expected)
     {
         output.WriteLine();
+        if (Chance.Of(outcome.Result, outcome.IsMoney, options.Errors) is { } probability)
+        {
+            Paragraph.Write(output, Width, outcome.Result.Request.Name);
+            FigureBlock.Write(output, Width, probability);
+            return;
+        }
+
         Paragraph.Write(output, Width, TitleOf(outcome));
         ErrorParts? parts = expected is null ? null : ErrorParts.Of(outcome.Result, expected.Result, options.Errors);
         FigureBlock.Write(output, Width, Figures.Of(outcome.Result, options.Errors), parts);

@@ -9,6 +9,7 @@ namespace Swarm.Cli.Running;
 internal static class ProgressText
 {
     private const int BarCells = 24;
+    private const double LongestSeconds = 1000.0 * 24 * 3600;
 
     /// <summary>The bar, the rate, and the time left.</summary>
     public static string Bar(RunProgress progress, TimeSpan elapsed)
@@ -16,8 +17,8 @@ internal static class ProgressText
         var share = (double)progress.TrialsDone / progress.Trials;
         var full = (int)(share * BarCells);
         var bar = new string('█', full).PadRight(BarCells, '░');
-        var left = TimeSpan.FromSeconds(elapsed.TotalSeconds * (1 - share) / share);
-        return $"{bar} {share.ToString("P0", CultureInfo.InvariantCulture),5}  {Rate(progress.TrialsDone, elapsed)}  {Clock(left)} left";
+        var left = Clock(elapsed.TotalSeconds * (1 - share) / share);
+        return $"{bar} {share.ToString("P0", CultureInfo.InvariantCulture),5}  {Rate(progress.TrialsDone, elapsed)}  {left} left";
     }
 
     /// <summary>The mean and the VaR at the highest asked level.</summary>
@@ -40,7 +41,12 @@ internal static class ProgressText
             : $"{NumberText.Count((long)rate)} trials/s";
     }
 
-    private static string Clock(TimeSpan time) => time.TotalHours >= 1
-        ? $"{(long)time.TotalHours}:{time:mm\\:ss}"
-        : time.ToString("m\\:ss", CultureInfo.InvariantCulture);
+    private static string Clock(double seconds)
+    {
+        var time = TimeSpan.FromSeconds(Math.Min(seconds, LongestSeconds));
+        if (time.TotalDays >= 2) return seconds > LongestSeconds ? "years" : $"{NumberText.Count((long)time.TotalDays)} days";
+        return time.TotalHours >= 1
+            ? $"{(long)time.TotalHours}:{time:mm\\:ss}"
+            : time.ToString("m\\:ss", CultureInfo.InvariantCulture);
+    }
 }

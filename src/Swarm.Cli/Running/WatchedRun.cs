@@ -15,7 +15,7 @@ internal sealed class WatchedRun(Terminal terminal)
     {
         var start = terminal.Clock.GetTimestamp();
         using var finished = new CancellationTokenSource();
-        var drawing = terminal.IsInteractive ? DrawUntilAsync(start, finished.Token) : Task.CompletedTask;
+        var drawing = terminal.IsInteractive ? DrawUntilAsync(model, start, finished.Token) : Task.CompletedTask;
         try
         {
             var outcome = await Task.Run(() => Run(model, settings, finished, cancellation), CancellationToken.None);
@@ -40,15 +40,16 @@ internal sealed class WatchedRun(Terminal terminal)
         }
     }
 
-    private async Task DrawUntilAsync(long start, CancellationToken finished)
+    private async Task DrawUntilAsync(Model model, long start, CancellationToken finished)
     {
         var console = AnsiConsole.Create(new AnsiConsoleSettings { Out = new AnsiConsoleOutput(terminal.Error) });
+        var featured = new FeaturedOutcome(model);
         using var timer = new PeriodicTimer(RedrawEvery, terminal.Clock);
         await console.Live(new Text("")).AutoClear(true).StartAsync(async live =>
         {
             while (await TickAsync(timer, finished))
             {
-                if (Volatile.Read(ref _latest) is { } progress) live.UpdateTarget(Picture(progress, terminal.Clock.GetElapsedTime(start)));
+                if (Volatile.Read(ref _latest) is { } progress) live.UpdateTarget(Picture(progress, featured, terminal.Clock.GetElapsedTime(start)));
             }
         });
     }
@@ -65,9 +66,9 @@ internal sealed class WatchedRun(Terminal terminal)
         }
     }
 
-    private static Rows Picture(RunProgress progress, TimeSpan elapsed)
+    private static Rows Picture(RunProgress progress, FeaturedOutcome featured, TimeSpan elapsed)
     {
         var bar = new Text(ProgressText.Bar(progress, elapsed));
-        return progress.Preview(0) is { } figures ? new Rows(bar, new Text(ProgressText.Figures(figures))) : new Rows(bar);
+        return featured.Figures(progress) is { } figures ? new Rows(bar, new Text(ProgressText.Figures(figures))) : new Rows(bar);
     }
 }

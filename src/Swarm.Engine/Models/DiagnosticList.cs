@@ -12,7 +12,7 @@ internal sealed class DiagnosticList
     public bool HasErrors => _counts[(int)Severity.Error] > 0;
 
     /// <summary>True once no further error will be told, so that looking for more is wasted.</summary>
-    public bool IsFull => _counts[(int)Severity.Error] >= ModelBounds.Diagnostics;
+    public bool IsFull => _counts[(int)Severity.Error] > ModelBounds.Diagnostics;
 
     public void Error(SourcePosition position, string message, string? hint = null) =>
         Add(new Diagnostic(Severity.Error, position, message, hint));

@@ -31,15 +31,17 @@ public static class ModelReader
         Func<TriangleRequest, (Triangle? Triangle, IReadOnlyList<Diagnostic> Diagnostics)> triangles)
     {
         DiagnosticList diagnostics = new();
-        Model? model = Read(fileName, text, forms, diagnostics);
-        return new ModelReading(diagnostics.HasErrors ? null : model, diagnostics.InOrder(fileName), []);
+        DataFiles files = new(data);
+        Model? model = Root(fileName, text, diagnostics) is { } root ? Read(root, diagnostics, files, forms, triangles) : null;
+        return new ModelReading(diagnostics.HasErrors ? null : model, diagnostics.InOrder(fileName), files.Found);
     }
 
-    private static Model? Read(string fileName, string text, IReadOnlyList<DistributionForm> forms, DiagnosticList diagnostics)
+    private static MappingNode? Root(string fileName, string text, DiagnosticList diagnostics)
     {
         if (text.Length > ModelBounds.TextLength)
         {
-            diagnostics.Error(new SourcePosition(fileName, 1, 1), $"the document is longer than {ModelBounds.TextLength:N0} characters", "keep data in data files");
+            diagnostics.Error(
+                new SourcePosition(fileName, 1, 1), $"the document is longer than {ModelBounds.TextLength:N0} characters", "keep data in data files");
             return null;
         }
 
@@ -49,18 +51,28 @@ public static class ModelReader
         }
 
         new StructureCheck(diagnostics).Check(node, ModelShape.Document, "the model");
-        return node is MappingNode root && !diagnostics.IsFull ? Read(root, forms, diagnostics) : null;
+        return diagnostics.IsFull ? null : node as MappingNode;
     }
 
-    private static Model Read(MappingNode root, IReadOnlyList<DistributionForm> forms, DiagnosticList diagnostics)
+    private static Model Read(
+        MappingNode root,
+        DiagnosticList diagnostics,
+        DataFiles files,
+        IReadOnlyList<DistributionForm> forms,
+        Func<TriangleRequest, (Triangle? Triangle, IReadOnlyList<Diagnostic> Diagnostics)> triangles)
     {
         ReadingContext context = new()
         {
+            Start = root.Position,
             Diagnostics = diagnostics,
             Forms = forms,
-            Names = new NameTable(diagnostics),
+            Data = files,
+            Names = new NameTable(diagnostics) { IsIncomplete = ModelShape.LosesNames(root) },
             Horizon = HeadSection.ReadHorizon(root),
         };
+
+        // Components first: their quantities' names are taken before draws and formulas choose theirs.
+        IReadOnlyList<TriangleInput> inputs = new TrianglesSection(context, triangles).Read(root);
         IReadOnlyList<Draw> draws = DrawsSection.Read(root, context);
         IReadOnlyList<Formula> formulas = FormulasSection.Read(root, context);
         FormulaSetCheck.Check(formulas, context);
@@ -71,6 +83,7 @@ public static class ModelReader
             Horizon = context.Horizon ?? 0,
             Draws = draws,
             Formulas = formulas,
+            Triangles = inputs,
             Outcomes = new OutcomesSection(context, new TruthInference(formulas)).Read(root),
         };
         if (!diagnostics.HasErrors)

@@ -114,6 +114,7 @@ internal static partial class Elementary
         where V : unmanaged, ILanes<V>
     {
         const double Tiny = 5.551115123125783e-17; // 2^-54
+        const double TwoTo60 = 1152921504606846976.0;
 
         // 1 + x = sum + lost exactly (Knuth's two-sum).
         var one = V.Create(1.0);
@@ -123,6 +124,9 @@ internal static partial class Elementary
         var m = SplitNormal(sum, out var exponent);
         var k = exponent - V.Create(TwoTo52 + 1023.0);
         var scaledLost = lost * V.ShiftLeft(V.SubtractIntegers(V.CreateBits(2046), exponent), 52);
+
+        // Above 2^60 nothing worth keeping is lost, and the scale would leave the exponents.
+        scaledLost &= V.LessThan(x, V.Create(TwoTo60));
         var f0 = m - one;
         var f = f0 + scaledLost;
         var dropped = (f0 - f) + scaledLost;

@@ -12,7 +12,7 @@ internal static partial class NormalFunctions
     public static double Quantile(double u) => Quantile(Lanes64.Create(u)).Value;
 
     /// <summary>
-    /// P(Z &lt;= x), within 4 ulp; the lower tail keeps its relative accuracy down to the subnormals. cdf(-inf) = 0, cdf(+inf) = 1.
+    /// P(Z &lt;= x), within 5 ulp; the lower tail keeps its relative accuracy down to the subnormals. cdf(-inf) = 0, cdf(+inf) = 1.
     /// </summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static V Cdf<V>(V x)

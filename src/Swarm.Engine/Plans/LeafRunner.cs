@@ -23,7 +23,12 @@ internal sealed unsafe class LeafRunner : IDisposable
     }
 
     /// <summary>Trials of the run so far, by component, for which the component had to draw again.</summary>
-    public long Redrawn(int component) => _executor.Kernels[component].Redrawn;
+    public long Redrawn(int component)
+    {
+        // The plan lists components in the order of their first use, and not those that no outcome needs.
+        int kernel = Array.FindIndex(_run.Compiled.Running.Components, used => used.Component == _run.Components[component]);
+        return kernel < 0 ? 0 : _executor.Kernels[kernel].Redrawn;
+    }
 
     /// <summary>Computes a leaf's values; the last leaf of a run may hold fewer trials than the others.</summary>
     /// <returns>The fault of the lowest trial, or null.</returns>

@@ -69,6 +69,12 @@ public static class ReportTableCodes
 {
     /// <summary>Residuals, a row a cell, with the columns of <see cref="ResidualColumns"/>.</summary>
     public const string Residuals = "residuals";
+
+    /// <summary>Link ratios by calendar period: Mack's calendar year test.</summary>
+    public const string CalendarTest = "calendar-test";
+
+    /// <summary>True for tables that judge a fit; a short page leaves them out.</summary>
+    public static bool IsDiagnostic(string code) => code == CalendarTest || code.StartsWith(Residuals, StringComparison.Ordinal);
 }
 
 /// <summary>Columns of a table of residuals.</summary>

@@ -24,13 +24,16 @@ internal static class ReserveTables
         ];
         if (ErrorsOf(fit, rows) is { } errors)
         {
-            columns.Add(Money("process error", [.. errors.Select(error => error.Process)]));
-            columns.Add(Money("parameter error", [.. errors.Select(error => error.Parameter)]));
-            columns.Add(Money("prediction error", [.. errors.Select(error => error.StandardError)]));
+            columns.Add(Money("process", [.. errors.Select(error => error.Process)]));
+            columns.Add(Money("parameter", [.. errors.Select(error => error.Parameter)]));
+            columns.Add(Money("error", [.. errors.Select(error => error.StandardError)]));
         }
 
-        return new ReportTable("reserves", name, "chain ladder by origin, in closed form", columns);
+        return new ReportTable("reserves", name, Title(columns.Count), columns);
     }
+
+    private static string Title(int columns) =>
+        columns > 4 ? "chain ladder by origin, with prediction errors in closed form" : "chain ladder by origin";
 
     /// <summary>The simulated means beside the reserves that they are to meet; null where the run does not report the total.</summary>
     public static ReportTable? Comparison(string name, ReservingFit fit, RunOutcome outcome)

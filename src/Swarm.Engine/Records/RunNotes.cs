@@ -12,7 +12,8 @@ public static class RunNotes
     {
         IEnumerable<Note> methods = model.Triangles.Select(triangle => new Note("method", MethodOf(triangle)));
         IEnumerable<Note> bookings = model.Triangles.Where(triangle => triangle.Options.Booked is not null).Select(Booking);
-        return [.. methods, .. bookings, .. outcome.Redraws.Where(redraw => redraw.Trials > 0).Select(Redrawn)];
+        IEnumerable<Note> tests = model.Triangles.Select(CalendarTest).OfType<Note>();
+        return [.. methods, .. bookings, .. tests, .. outcome.Redraws.Where(redraw => redraw.Trials > 0).Select(Redrawn)];
     }
 
     private static string MethodOf(TriangleInput input)
@@ -58,6 +59,23 @@ public static class RunNotes
         BookedEstimate booked = input.Options.Booked!;
         string form = booked.Form == BookedForm.Shift ? "shift" : "scaling";
         return new Note("booked", $"{input.Name}: moved by {form} to the booked best estimate {booked.BestEstimate:#,##0.###}.", booked.BestEstimate);
+    }
+
+    private static Note? CalendarTest(TriangleInput input)
+    {
+        if (ReservingFit.Of(input.Triangle, input.Options, []) is not { } fit)
+        {
+            return null;
+        }
+
+        CalendarYearTest test = CalendarYearTest.Of(fit.ChainLadder.Ratios);
+        string verdict = test.IsRejected
+            ? "outside: calendar periods push the link ratios, and the figures do not know it"
+            : "inside: no calendar year effect is seen";
+        return new Note(
+            "calendar-year-effect",
+            $"{input.Name}: calendar year test (Mack 1994): Z = {test.Statistic:0}, about 95 % range {test.Low:0.0} to {test.High:0.0}; {verdict}.",
+            test.Statistic);
     }
 
     private static Note Redrawn(RedrawCount redraw) => new(

@@ -15,7 +15,7 @@ public static class RunTables
         if (ReservingFit.Of(input.Triangle, input.Options, []) is not { } fit) yield break;
         yield return ReserveTables.Reserves(input.Name, fit);
         if (ReserveTables.Comparison(input.Name, fit, outcome) is { } comparison) yield return comparison;
-        yield return DevelopmentTables.Of(input.Name, fit);
-        if (fit.Odp is { } odp) yield return DevelopmentTables.Residuals(input.Name, odp);
+        yield return DevelopmentTable.Of(input.Name, fit);
+        foreach (ReportTable table in ResidualTables.Of(input.Name, fit)) yield return table;
     }
 }

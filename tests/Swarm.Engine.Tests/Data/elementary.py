@@ -154,6 +154,14 @@ def log_gamma_arguments():
     yield from (2 + signed_tiny_to(0.2) for _ in range(150))
 
 
+def incomplete_gamma_arguments():
+    for _ in range(700):
+        a = 10 ** R.uniform(-2, 6)
+        x = a * 10 ** R.uniform(-1, 0.5) if a < 30 else a + R.uniform(-6, 6) * math.sqrt(a)
+        if mp.gammainc(a, 0, x, regularized=True) > mpf("1e-290"):
+            yield a, x
+
+
 def unary(name, function, arguments):
     write(name, "x", [row([x], function(mpf(x))) for x in arguments])
 
@@ -167,6 +175,16 @@ def main():
     unary("normal-cdf", normal_cdf, cdf_arguments())
     unary("normal-quantile", normal_quantile, quantile_arguments())
     unary("log-gamma", mp.loggamma, (x for x in log_gamma_arguments() if x not in (0.0, 1.0, 2.0)))
+    write(
+        "gamma-lower",
+        "a,x",
+        [row([a, x], mp.gammainc(mpf(a), 0, mpf(x), regularized=True)) for a, x in incomplete_gamma_arguments()],
+    )
+    write(
+        "gamma-upper",
+        "a,x",
+        [row([a, x], mp.gammainc(mpf(a), mpf(x), regularized=True)) for a, x in incomplete_gamma_arguments()],
+    )
 
 
 if __name__ == "__main__":

@@ -32,31 +32,24 @@ internal static class Documents
             "one_of",
             [new("values", ParameterKind.Numbers, "Values."), new("chances", ParameterKind.Numbers, "Their chances.")],
             "One of several values.",
-            a => DistributionBinding.Of(new OneOf(a.Numbers("values"), a.Numbers("chances")))),
+            a => DistributionBinding.Of(
+                a.Numbers("values").Count != a.Numbers("chances").Count
+                    ? [new ParameterProblem("chances", "'chances' and 'values' differ in length", "write one chance a value")]
+                    : [],
+                () => new OneOf(a.Numbers("values"), a.Numbers("chances")))),
     ];
 
-    /// <summary>Three origin years with 3, 2 and 1 known developments, whatever the file says.</summary>
-    public static Triangle Triangle { get; } = new(["2023", "2024", "2025"], [[100, 50, 10], [110, 55], [120]], 12);
+    /// <summary>Six origin years, whatever the file says.</summary>
+    public static Triangle Triangle { get; } = new(
+        ["2020", "2021", "2022", "2023", "2024", "2025"],
+        [[100, 60, 30, 14, 6, 2], [108, 58, 35, 12, 7], [97, 66, 28, 15], [121, 62, 36], [115, 75], [130]],
+        12);
 
     public static ModelReading Read(string text) => Read(text, _ => (Triangle, []));
 
     public static ModelReading Read(
         string text, Func<TriangleRequest, (Triangle? Triangle, IReadOnlyList<Diagnostic> Diagnostics)> triangles) =>
         ModelReader.Read(FileName, text, name => name.EndsWith(".csv", StringComparison.Ordinal) ? new DataFile(name, [1, 2, 3]) : null, Forms, triangles);
-
-    /// <summary>A document of formulas, one a line, of which <c>x</c> is reported.</summary>
-    public static string OfFormulas(params string[] formulas) =>
-        $"""
-        model: test
-        horizon: 5
-        draws:
-          a: normal(mean=0, sd=1)
-          d[t]: normal(mean=0, sd=1)
-        formulas:
-        {string.Join('\n', formulas.Select(line => "  " + line))}
-        outcomes:
-          x: 
-        """;
 
     /// <summary>The model, which must have no error.</summary>
     public static Model Accepted(string text)

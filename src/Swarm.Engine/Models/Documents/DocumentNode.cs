@@ -35,6 +35,9 @@ internal sealed class MappingNode : DocumentNode
 
     public IReadOnlyList<MappingEntry> Entries { get; }
 
+    /// <summary>True if entries were refused and left out.</summary>
+    public bool LostEntries { get; init; }
+
     public override int Size { get; }
 
     public override int Height { get; }

@@ -32,8 +32,8 @@ internal sealed class ScalarNode : DocumentNode
     /// <summary>True for text that stands in no quotes.</summary>
     public bool IsPlain => _style == ScalarStyle.Plain;
 
-    /// <summary>True if nothing was written, as after <c>key:</c> at the end of a line.</summary>
-    public bool IsNothing => IsPlain && Text.Length == 0;
+    /// <summary>True if nothing was written, as after <c>key:</c> at the end of a line, or one of YAML's words for it.</summary>
+    public bool IsNothing => IsPlain && (Text is "" or "~" or "null" or "Null" or "NULL");
 
     /// <summary>Place of a character of <see cref="Text"/>; its length gives the place just behind.</summary>
     public SourcePosition PositionOf(int offset)

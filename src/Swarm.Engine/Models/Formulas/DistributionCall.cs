@@ -17,7 +17,7 @@ internal sealed record DistributionCall(string Name, SourcePosition Position, IR
         {
             FormulaParser parser = new(source);
             DistributionCall call = Read(parser);
-            parser.ExpectEnd();
+            parser.ExpectEnd("a draw is one distribution, and arithmetic on it is a formula");
             return call;
         }
         catch (FormulaSyntaxException exception)

@@ -38,7 +38,7 @@ internal sealed class FormulaParser
         {
             FormulaParser parser = new(source);
             Expression expression = parser.Expression();
-            parser.ExpectEnd();
+            parser.ExpectEnd("the formula should end here or go on with an operator");
             return expression;
         }
         catch (FormulaSyntaxException exception)
@@ -51,11 +51,11 @@ internal sealed class FormulaParser
     /// <summary>Parses an expression up to what cannot belong to it.</summary>
     public Expression Expression() => Operation(Strength.Or).Expression;
 
-    public void ExpectEnd()
+    public void ExpectEnd(string expectation)
     {
         if (_token.Kind != TokenKind.End)
         {
-            throw Unexpected("the formula should end here or go on with an operator");
+            throw Unexpected(expectation);
         }
     }
 
@@ -78,7 +78,9 @@ internal sealed class FormulaParser
     }
 
     public FormulaSyntaxException Unexpected(string expectation) =>
-        new(_token.Start, $"{_token.Shown} is out of place: {expectation}", FormulaWords.HintFor(_token.Text));
+        _token.Kind == TokenKind.End
+            ? new(_token.Start, $"the text ends too early: {expectation}", null)
+            : new(_token.Start, $"{_token.Shown} is out of place: {expectation}", FormulaWords.HintFor(_token.Text));
 
     public SourcePosition PositionOf(Token token) => _source.PositionOf(token.Start);
 
@@ -238,7 +240,7 @@ internal sealed class FormulaParser
 
         return arguments.Count >= function.Least && arguments.Count <= function.Most
             ? new CallExpression(function.Function, [.. arguments.Select(a => a.Expression)], position)
-            : throw new FormulaSyntaxException(name.Start, $"{name.Shown} does not take {arguments.Count} arguments", $"write {function.Form}");
+            : throw new FormulaSyntaxException(name.Start, $"{name.Shown} is given {arguments.Count} {(arguments.Count == 1 ? "argument" : "arguments")}", $"write {function.Form}");
     }
 
     private static string ReductionHint(string name) => name switch

@@ -73,7 +73,7 @@ internal sealed class DependencyGraph
             }
             else
             {
-                Connect((ReferenceExpression)part, unit, instances);
+                Connect((ReferenceExpression)part, formula.Name.Kind == QuantityKind.PerStep ? unit : null, instances);
             }
         }
     }
@@ -91,7 +91,11 @@ internal sealed class DependencyGraph
         return Add(unit);
     }
 
-    private void Connect(ReferenceExpression reference, DependencyUnit unit, List<(int Unit, int Step)> instances)
+    /// <summary>Adds what a reference needs; what <see cref="ReferenceCheck"/> refuses is passed over.</summary>
+    /// <param name="reference">The reference.</param>
+    /// <param name="unit">The unit whose step <c>[t]</c> means; null where no step is current.</param>
+    /// <param name="instances">Where instances at given steps go.</param>
+    private void Connect(ReferenceExpression reference, DependencyUnit? unit, List<(int Unit, int Step)> instances)
     {
         if (!_byName.TryGetValue(reference.Name, out int target) || _units[target].IsStepped != (reference.Index != StepIndex.None))
         {
@@ -101,10 +105,10 @@ internal sealed class DependencyGraph
         switch (reference.Index)
         {
             case StepIndex.Current:
-                unit.Current.Add(target);
+                unit?.Current.Add(target);
                 break;
             case StepIndex.Previous:
-                unit.Previous.Add(target);
+                unit?.Previous.Add(target);
                 break;
             case StepIndex.Fixed when reference.Step > Horizon:
                 break;

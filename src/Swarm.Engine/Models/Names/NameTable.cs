@@ -1,3 +1,5 @@
+using Swarm.Engine.Models.Formulas;
+
 namespace Swarm.Engine.Models.Names;
 
 /// <summary>Where a quantity comes from.</summary>
@@ -32,6 +34,7 @@ internal sealed class NameTable(DiagnosticList diagnostics)
     private readonly Dictionary<string, KnownQuantity> _componentSteps = new(StringComparer.Ordinal);
     private readonly Dictionary<string, SourcePosition> _components = new(StringComparer.Ordinal);
     private readonly HashSet<string> _unreadable = new(StringComparer.Ordinal);
+    private readonly HashSet<string> _refused = new(StringComparer.Ordinal);
 
     /// <summary>All names.</summary>
     public IEnumerable<KnownQuantity> All => _perTrialOrSteps.Values.Concat(_componentSteps.Values);
@@ -56,8 +59,15 @@ internal sealed class NameTable(DiagnosticList diagnostics)
         return null;
     }
 
-    /// <summary>True if the name belongs to a component that could not be read, so that nobody knows whether it exists.</summary>
-    public bool MayExist(string name) => ComponentOf(name) is { } component && _unreadable.Contains(component);
+    /// <summary>True if parts of the document that declare names could not be read, so that any name may exist.</summary>
+    public bool IsIncomplete { get; init; }
+
+    /// <summary>True if nobody can know whether an unknown name exists, since what may declare it was refused already.</summary>
+    public bool MayExist(string name) =>
+        IsIncomplete || _refused.Contains(name) || (ComponentOf(name) is { } component && _unreadable.Contains(component));
+
+    /// <summary>Remembers the name of a key that was refused, so that what refers to it is not refused, too.</summary>
+    public void Refuse(string key) => _refused.Add(key[..NameText.LengthAt(key, 0)]);
 
     /// <summary>Declares a component; its quantities follow, unless it could not be read.</summary>
     public void DeclareComponent(string name, SourcePosition position)

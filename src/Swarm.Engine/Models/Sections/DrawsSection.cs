@@ -1,3 +1,4 @@
+using Swarm.Engine.Distributions;
 using Swarm.Engine.Models.Documents;
 using Swarm.Engine.Models.Formulas;
 using Swarm.Engine.Models.Names;
@@ -9,7 +10,8 @@ namespace Swarm.Engine.Models.Sections;
 internal static class DrawsSection
 {
     private static readonly DistributionShape Distribution = new(
-        "A distribution with its parameters by name, as in normal(mean=2%, sd=1.2%). Parameters are constant: numbers or arithmetic on numbers.");
+        "A distribution with its parameters by name, as in normal(mean=2%, sd=1.2%). Parameters are constant: numbers or arithmetic on numbers. Known are "
+        + string.Join("; ", DistributionCatalogue.Forms.Select(form => $"{form.Signature} ({form.Help.TrimEnd('.')})")) + ".");
 
     public static MapShape Shape { get; } = new(
         "Random inputs. A draw x exists once per trial, x[t] once per step. Its name keys its random numbers, so that they stay the same when the rest of the model changes.",
@@ -34,6 +36,7 @@ internal static class DrawsSection
         {
             if (NameForm.Draw.Read(entry.Key.Text) is not QuantityName name)
             {
+                context.Names.Refuse(entry.Key.Text);
                 continue;
             }
 

@@ -54,6 +54,5 @@ internal static class FormulaSetCheck
     }
 
     private static void ReportSize(ReadingContext context, string message) =>
-        context.Diagnostics.Error(
-            context.Names.All.First().Position with { Line = 1, Column = 1 }, message, "split the model, or shorten the horizon");
+        context.Diagnostics.Error(context.Start, message, "split the model, or shorten the horizon");
 }

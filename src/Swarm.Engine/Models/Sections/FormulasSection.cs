@@ -20,8 +20,14 @@ internal static class FormulasSection
         List<Formula> formulas = [];
         foreach (MappingEntry entry in root.Entries("formulas"))
         {
-            if (context.Diagnostics.IsFull || NameForm.Formula.Read(entry.Key.Text) is not QuantityName name)
+            if (context.Diagnostics.IsFull)
             {
+                break;
+            }
+
+            if (NameForm.Formula.Read(entry.Key.Text) is not QuantityName name)
+            {
+                context.Names.Refuse(entry.Key.Text);
                 continue;
             }
 

@@ -37,16 +37,11 @@ internal sealed class OutcomesSection(ReadingContext context, TruthInference tru
                 new Field("unit", new ChoiceShape(
                     "Whether figures are shown with the unit of money.",
                     [new("money", "An amount of money (the default, but for comparisons)."), new("none", "A rate, a count, a probability.")])),
-            ]) { MayBeNothing = true });
+            ]) { MayBeNothing = true })
+        { Least = 1 };
 
     public IReadOnlyList<Outcome> Read(MappingNode root)
     {
-        MappingEntry? section = root.Entry("outcomes");
-        if (section is { Value: MappingNode { Entries.Count: 0 } })
-        {
-            context.Diagnostics.Error(section.Key.Position, "the model reports on nothing", "name a quantity, as in 'outcomes: {unpaid: {}}'");
-        }
-
         List<Outcome> outcomes = [];
         foreach (MappingEntry entry in root.Entries("outcomes"))
         {
@@ -122,7 +117,7 @@ internal sealed class OutcomesSection(ReadingContext context, TruthInference tru
     {
         MappingNode? options = entry.Value as MappingNode;
         CheckCount(name, entry.Key);
-        if (options?.Entry("fan") is { } fan && name.Kind != QuantityKind.PerStep)
+        if (options.Truth("fan") == true && options?.Entry("fan") is { } fan && name.Kind != QuantityKind.PerStep)
         {
             context.Diagnostics.Error(fan.Key.Position, $"'{name}' has one value, and no fan over steps", $"report {name.Name}[t], or remove 'fan'");
         }
@@ -163,6 +158,7 @@ internal sealed class OutcomesSection(ReadingContext context, TruthInference tru
         }
 
         List<double> numbers = [];
+        HashSet<double> seen = [];
         foreach (DocumentNode item in items)
         {
             if (NodeValues.Number(item) is not double number)
@@ -170,7 +166,7 @@ internal sealed class OutcomesSection(ReadingContext context, TruthInference tru
                 continue;
             }
 
-            if (numbers.Contains(number))
+            if (!seen.Add(number))
             {
                 context.Diagnostics.Warning(item.Position, $"{((ScalarNode)item).Text} stands twice in '{key}'", "remove one");
                 continue;

@@ -79,7 +79,11 @@ internal sealed record Field(string Key, Shape Shape)
 }
 
 /// <summary>A mapping whose keys are names of the user's choice.</summary>
-internal sealed record MapShape(string Help, NameForm Names, Shape Value) : Shape(Help);
+internal sealed record MapShape(string Help, NameForm Names, Shape Value) : Shape(Help)
+{
+    /// <summary>Least number of entries.</summary>
+    public int Least { get; init; }
+}
 
 /// <summary>A short form, or a mapping that can say more.</summary>
 internal sealed record ShortOrLongShape(string Help, Shape Short, ObjectShape Long) : Shape(Help);

@@ -14,12 +14,6 @@ internal sealed class StructureCheck(DiagnosticList diagnostics)
 {
     public void Check(DocumentNode node, Shape shape, string place)
     {
-        if (node is ScalarNode { IsPlain: true, Text: "null" or "Null" or "NULL" or "~" } nothing)
-        {
-            diagnostics.Error(nothing.Position, $"{place} is {nothing.Text}, which YAML takes for nothing", "write a value, or put the word in quotes");
-            return;
-        }
-
         switch (shape)
         {
             case ShortOrLongShape either:
@@ -27,32 +21,39 @@ internal sealed class StructureCheck(DiagnosticList diagnostics)
                 break;
             case ObjectShape { MayBeNothing: true } when node is ScalarNode { IsNothing: true }:
                 break;
-            case ObjectShape fields when Is<MappingNode>(node, place, "a mapping") is { } mapping:
+            case ObjectShape fields when Is<MappingNode>(node, place) is { } mapping:
                 CheckFields(mapping, fields, place);
                 break;
-            case MapShape map when Is<MappingNode>(node, place, "a mapping") is { } mapping:
-                CheckEntries(mapping, map);
+            case MapShape map when Is<MappingNode>(node, place) is { } mapping:
+                CheckEntries(mapping, map, place);
                 break;
-            case ListShape list when Is<SequenceNode>(node, place, "a list, as in [a, b]") is { } sequence:
+            case ListShape list when Is<SequenceNode>(node, place) is { } sequence:
                 CheckItems(sequence, list, place);
                 break;
-            case not (ObjectShape or MapShape or ListShape) when Is<ScalarNode>(node, place, "a single value") is { } scalar:
+            case not (ObjectShape or MapShape or ListShape) when Is<ScalarNode>(node, place) is { } scalar:
                 CheckScalar(scalar, shape, place);
                 break;
         }
     }
 
-    private T? Is<T>(DocumentNode node, string place, string wanted)
+    private T? Is<T>(DocumentNode node, string place)
         where T : DocumentNode
     {
-        if (node is T { } right)
+        if (node is T right)
         {
             return right;
         }
 
-        diagnostics.Error(node.Position, $"{place} is {node.Kind}", $"write {wanted}");
+        diagnostics.Error(node.Position, $"{place} is {node.Kind}", typeof(T) == typeof(MappingNode) ? EntriesHint(node)
+            : typeof(T) == typeof(SequenceNode) ? "write a list, as in [a, b]"
+            : "write a single value");
         return null;
     }
+
+    private static string EntriesHint(DocumentNode node) =>
+        node is ScalarNode { IsPlain: true } scalar && scalar.Text.Contains(':', StringComparison.Ordinal)
+            ? "leave a space behind the colon"
+            : "write entries 'key: value', one a line";
 
     private void CheckFields(MappingNode mapping, ObjectShape shape, string place)
     {
@@ -72,7 +73,7 @@ internal sealed class StructureCheck(DiagnosticList diagnostics)
 
         foreach (Field missing in shape.Fields.Where(f => f.IsRequired && mapping[f.Key] is null))
         {
-            diagnostics.Error(mapping.Position, $"'{missing.Key}' is missing in {place}", $"add '{missing.Key}: ...' ({missing.Shape.Help.TrimEnd('.')})");
+            diagnostics.Error(mapping.Position, $"'{missing.Key}' is missing in {place}", $"add '{missing.Key}: ...' ({missing.Shape.Help.Split([". ", ": ", "; "], 2, StringSplitOptions.None)[0].TrimEnd('.')})");
         }
 
         int given = shape.OneOf.Count(key => mapping[key] is not null);
@@ -91,8 +92,13 @@ internal sealed class StructureCheck(DiagnosticList diagnostics)
             nearest is null ? $"known are {string.Join(", ", shape.Fields.Select(f => f.Key))}" : $"did you mean '{nearest}'?");
     }
 
-    private void CheckEntries(MappingNode mapping, MapShape shape)
+    private void CheckEntries(MappingNode mapping, MapShape shape, string place)
     {
+        if (mapping.Entries.Count < shape.Least)
+        {
+            diagnostics.Error(mapping.Position, $"{place} is empty", "name at least one, as in 'x: {}'");
+        }
+
         foreach (MappingEntry entry in mapping.Entries)
         {
             string key = entry.Key.Text;
@@ -138,7 +144,7 @@ internal sealed class StructureCheck(DiagnosticList diagnostics)
             diagnostics.Error(sequence.Position, $"{place} has {sequence.Items.Count} items", $"write {wanted}");
         }
 
-        foreach (DocumentNode item in sequence.Items)
+        foreach (DocumentNode item in sequence.Items.Take(shape.Most))
         {
             Check(item, shape.Item, $"an item of {place}");
         }
@@ -148,7 +154,10 @@ internal sealed class StructureCheck(DiagnosticList diagnostics)
     {
         if (scalar.IsNothing)
         {
-            diagnostics.Error(scalar.Position, $"{place} has no value", "write one behind the colon");
+            diagnostics.Error(
+                scalar.Position,
+                scalar.Text.Length == 0 ? $"{place} has no value" : $"{place} is {scalar.Text}, which YAML takes for nothing",
+                scalar.Text.Length == 0 ? "write one behind the colon" : "write a value, or put the word in quotes");
             return;
         }
 

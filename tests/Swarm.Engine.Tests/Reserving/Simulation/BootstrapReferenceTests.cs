@@ -16,13 +16,13 @@ public sealed class BootstrapReferenceTests
     private static readonly Lazy<Dictionary<string, OutcomeFigures>> Constant =
         new(() => TaylorAshe.Figures(new ReservingOptions(), Trials));
 
-    public static TheoryData<string> Origins => ["2", "3", "4", "5", "6", "7", "8", "9", "10"];
+    public static TheoryData<int> Origins => [2, 3, 4, 5, 6, 7, 8, 9, 10];
 
     [Theory]
     [MemberData(nameof(Origins))]
-    public void Origins_agree_with_the_reference(string origin)
+    public void Origins_agree_with_the_reference(int origin)
     {
-        OutcomeFigures figures = Constant.Value[$"t.unpaid.{origin}"];
+        OutcomeFigures figures = Constant.Value[$"t.unpaid.{2000 + origin}"];
 
         AssertAgrees($"origin_{origin}.mean", figures.Mean);
         AssertAgrees($"origin_{origin}.prediction_sd", figures.Sd);

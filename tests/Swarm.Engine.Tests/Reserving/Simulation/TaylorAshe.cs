@@ -8,10 +8,15 @@ namespace Swarm.Engine.Tests.Reserving.Simulation;
 /// <summary>The triangle of Taylor &amp; Ashe (1983) and runs on it.</summary>
 internal static class TaylorAshe
 {
-    public static Triangle Triangle { get; } = TriangleReader.Read(
-        new TriangleRequest { FileName = "taylor-ashe.csv", Content = File.ReadAllBytes(TestFile.Path("taylor-ashe.csv")) }).Triangle!;
+    public static Triangle Triangle { get; } = TriangleReader.Read(new TriangleRequest
+    {
+        FileName = "reserving-taylor-ashe.csv",
+        Content = File.ReadAllBytes(TestFile.Path("reserving-taylor-ashe.csv")),
+        Layout = TriangleLayout.Square,
+        Amounts = TriangleAmounts.Cumulative,
+    }).Triangle!;
 
-    /// <summary>Figures by quantity: <c>t.unpaid</c>, <c>t.unpaid.7</c>, <c>t.expected</c>, <c>t.paid.12</c>.</summary>
+    /// <summary>Figures by quantity: <c>t.unpaid</c>, <c>t.unpaid.2007</c>, <c>t.expected</c>, <c>t.paid.2012</c>.</summary>
     public static Dictionary<string, OutcomeFigures> Figures(ReservingOptions options, long trials, ulong seed = 1) =>
         Run(options, trials, seed).Results.ToDictionary(
             result => result.Result.Request.Name, result => Swarm.Engine.Summaries.Figures.Of(result.Result, ErrorMethod.ClosedForm));

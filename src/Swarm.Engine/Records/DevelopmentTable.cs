@@ -2,8 +2,8 @@ using Swarm.Engine.Reserving;
 
 namespace Swarm.Engine.Records;
 
-/// <summary>Tables by development period and by cell.</summary>
-internal static class DevelopmentTables
+/// <summary>The table by development period.</summary>
+internal static class DevelopmentTable
 {
     /// <summary>Factors, with what measures their uncertainty: Mack's sigmas, or the scales and the residuals behind each.</summary>
     public static ReportTable Of(string name, ReservingFit fit)
@@ -28,26 +28,6 @@ internal static class DevelopmentTables
         }
 
         return new ReportTable("development", name, "development factors", columns);
-    }
-
-    /// <summary>Scaled Pearson residuals of all known cells.</summary>
-    public static ReportTable Residuals(string name, OdpFit fit)
-    {
-        IReadOnlyList<Residual> residuals = fit.Residuals;
-        Triangle triangle = fit.Triangle;
-        return new ReportTable(
-            ReportTableCodes.Residuals,
-            name,
-            "scaled Pearson residuals by cell",
-            [
-                ReportColumn.OfLabels(ResidualColumns.Origin, [.. residuals.Select(residual => triangle.Origins[residual.Origin])]),
-                ReportColumn.OfNumbers(ResidualColumns.Development, ColumnKind.Count, [.. residuals.Select(residual => residual.Development + 1.0)]),
-                ReportColumn.OfLabels(
-                    ResidualColumns.Calendar, [.. residuals.Select(residual => PeriodLabel.Add(triangle.Origins[0], residual.Calendar))]),
-                ReportColumn.OfNumbers("observed", ColumnKind.Money, [.. residuals.Select(residual => residual.Observed)]),
-                ReportColumn.OfNumbers("fitted", ColumnKind.Money, [.. residuals.Select(residual => residual.Fitted)]),
-                ReportColumn.OfNumbers(ResidualColumns.Residual, ColumnKind.Number, [.. residuals.Select(residual => residual.Scaled)]),
-            ]);
     }
 
     private static string StepName(int step, int insideTriangle) => step < insideTriangle ? $"{step + 1} to {step + 2}" : "tail";
