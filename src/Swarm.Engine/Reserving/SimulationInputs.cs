@@ -39,6 +39,7 @@ internal static class SimulationInputs
             [.. Enumerable.Range(0, shape.Origins).Select(mack.Triangle.Latest)],
             [.. mack.Factors],
             [.. mack.FactorErrors],
+            mack.Alpha,
             [.. mack.SigmaSquared.Select(Math.Sqrt)],
             TailShares(fit),
             mack.ChainLadder.Options.Process,

@@ -17,8 +17,8 @@ internal static class TriangleShape
                 new Field("data", new TextShape("Name of the data file, a CSV, as seen from the model.")) { IsRequired = true },
                 new Field("columns", Columns()),
                 new Field("layout", new ChoiceShape(
-                    "How the table is laid out.",
-                    [new("long", "One line a cell: origin, development, amount (the default)."), new("square", "One line an origin, one column a development.")])),
+                    "How the table is laid out; told from its header by default.",
+                    [new("long", "One line a cell: origin, development, amount."), new("square", "One line an origin, one column a development.")])),
                 new Field("amounts", new ChoiceShape(
                     "What the amounts are.",
                     [new("cumulative", "Sums up to and with the development period."), new("incremental", "What fell in the development period.")])) { IsRequired = true },

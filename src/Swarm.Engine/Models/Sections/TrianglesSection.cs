@@ -64,7 +64,12 @@ internal sealed class TrianglesSection(
         {
             FileName = file.Name,
             Content = file.Content,
-            Layout = options.Text("layout") == "square" ? TriangleLayout.Square : TriangleLayout.Long,
+            Layout = options.Text("layout") switch
+            {
+                "square" => TriangleLayout.Square,
+                "long" => TriangleLayout.Long,
+                _ => TriangleLayout.FromHeader,
+            },
             Amounts = options.Text("amounts") == "incremental" ? TriangleAmounts.Incremental : TriangleAmounts.Cumulative,
             OriginColumn = columns.Text("origin") ?? "origin",
             DevelopmentColumn = columns.Text("development") ?? "development",
@@ -129,25 +134,5 @@ internal sealed class TrianglesSection(
             Options = reserving,
             Position = position,
         };
-    }
-
-    /// <summary>The method is fitted here, too, so that a triangle that it cannot take is refused before anything runs.</summary>
-    private ReservingFit? Fit(Triangle triangle, ReservingOptions options, SourcePosition position)
-    {
-        List<Finding> findings = [];
-        ReservingFit? fit = ReservingFit.Of(triangle, options, findings);
-        foreach (Finding finding in findings)
-        {
-            if (finding.Severity == Severity.Error)
-            {
-                context.Diagnostics.Error(position, finding.Message, finding.Hint);
-            }
-            else
-            {
-                context.Diagnostics.Warning(position, finding.Message, finding.Hint);
-            }
-        }
-
-        return fit;
     }
 }

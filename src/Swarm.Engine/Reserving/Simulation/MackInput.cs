@@ -8,6 +8,7 @@ namespace Swarm.Engine.Reserving.Simulation;
 /// <param name="Latest">Amount to date of each origin.</param>
 /// <param name="Factors">Estimated development factors.</param>
 /// <param name="FactorErrors">Their standard errors.</param>
+/// <param name="Alpha">1 or 0: a link ratio varies as sigma^2 / C^alpha (Mack 1999).</param>
 /// <param name="Sigmas">Root of the variance parameter of each development.</param>
 /// <param name="TailShares">Share of the tail that is paid in each period after the triangle; empty without tail.</param>
 /// <param name="Process">Gamma or lognormal.</param>
@@ -19,6 +20,7 @@ internal sealed record MackInput(
     double[] Latest,
     double[] Factors,
     double[] FactorErrors,
+    int Alpha,
     double[] Sigmas,
     double[] TailShares,
     ProcessError Process,

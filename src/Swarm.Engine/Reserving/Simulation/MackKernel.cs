@@ -23,7 +23,7 @@ internal sealed unsafe class MackKernel<V> : ComponentKernel
     {
         _input = input;
         _sums = new RunOffSums<V>(input.Shape, input.Booking, Run);
-        _step = new MackStep<V>(input.Process, Run);
+        _step = new MackStep<V>(input.Process, input.Alpha, Run);
         _factors = new ColumnMemory(input.Factors.Length, Run);
     }
 
@@ -72,6 +72,13 @@ internal sealed unsafe class MackKernel<V> : ComponentKernel
         long item = 0;
         for (int i = 0; i < _input.Shape.Origins; i++)
         {
+            if (_input.Latest[i] == 0)
+            {
+                // Nothing grows out of nothing, and a mean of 0 has no coefficient of variation; the numbers are skipped all the same.
+                item += Math.Max(0, _input.Factors.Length - _input.Shape.Known[i] + 1);
+                continue;
+            }
+
             new Span<double>(Cumulative, Run).Fill(_input.Latest[i]);
             new Span<double>(Expected, Run).Fill(_input.Latest[i]);
             for (int k = _input.Shape.Known[i] - 1; k < _input.Factors.Length; k++, item++)

@@ -10,13 +10,18 @@ internal sealed unsafe class MackStep<V> : IDisposable
     where V : unmanaged, ILanes<V>
 {
     private readonly ProcessError _process;
+    private readonly bool _isVolumeWeighted;
     private readonly int _trials;
     private readonly ColumnMemory _columns;
     private readonly GammaKernel<V> _gamma;
 
-    public MackStep(ProcessError process, int trials)
+    /// <param name="process">Gamma or lognormal.</param>
+    /// <param name="alpha">1 or 0: amounts vary as sigma^2 C^(2 - alpha).</param>
+    /// <param name="trials">Trials of a column.</param>
+    public MackStep(ProcessError process, int alpha, int trials)
     {
         _process = process;
+        _isVolumeWeighted = alpha == 1;
         _trials = trials;
         _columns = new ColumnMemory(2, trials);
         _gamma = new GammaKernel<V>(1, trials);
@@ -36,7 +41,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
         }
     }
 
-    /// <summary>Replaces cumulative amounts C by those of the next period: mean f C, variance sigma^2 C.</summary>
+    /// <summary>Replaces cumulative amounts C by those of the next period: mean f C, variance sigma^2 C^(2 - alpha).</summary>
     public void Advance(in ItemStream numbers, double* factor, double sigma, double* cumulative)
     {
         if (sigma == 0)
@@ -68,7 +73,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
         }
     }
 
-    /// <summary>Shape f^2 C / sigma^2, scale sigma^2 / f.</summary>
+    /// <summary>Shape f^2 C^alpha / sigma^2, scale sigma^2 C^(1 - alpha) / f.</summary>
     [MethodImpl(MethodImplOptions.NoInlining)]
     private void AdvanceGamma(in ItemStream numbers, double* factor, double sigma, double* cumulative)
     {
@@ -78,13 +83,16 @@ internal sealed unsafe class MackStep<V> : IDisposable
         for (int t = 0; t < _trials; t += V.Count)
         {
             V f = V.Load(factor + t);
-            V.Store(f * f * V.Load(cumulative + t) / variance, shape + t);
+            V weight = _isVolumeWeighted ? V.Load(cumulative + t) : V.Create(1);
+            V.Store(f * f * weight / variance, shape + t);
         }
 
         _gamma.Fill(numbers, 1, shape, unit);
         for (int t = 0; t < _trials; t += V.Count)
         {
-            V.Store(V.Load(unit + t) * (variance / V.Load(factor + t)), cumulative + t);
+            V scale = variance / V.Load(factor + t);
+            scale = _isVolumeWeighted ? scale : scale * V.Load(cumulative + t);
+            V.Store(V.Load(unit + t) * scale, cumulative + t);
         }
     }
 
@@ -96,7 +104,8 @@ internal sealed unsafe class MackStep<V> : IDisposable
         for (int t = 0; t < _trials; t += V.Count)
         {
             V mean = V.Load(cumulative + t) * V.Load(factor + t);
-            V squaredCv = variance * V.Load(cumulative + t) / (mean * mean);
+            V f = V.Load(factor + t);
+            V squaredCv = _isVolumeWeighted ? variance * V.Load(cumulative + t) / (mean * mean) : variance / (f * f);
             V logVariance = Elementary.Log1p(squaredCv);
             V exponent = V.FusedMultiplyAdd(V.Sqrt(logVariance), Normal(numbers, t), -(half * logVariance));
             V.Store(mean * Elementary.Exp(exponent), cumulative + t);
