@@ -11,7 +11,7 @@ internal static class ExitCodes
     /// <summary>The command line is not understood.</summary>
     public const int Usage = 2;
 
-    /// <summary>The run stopped at a fault of arithmetic.</summary>
+    /// <summary>The run stopped at a fault of arithmetic, or its result is refused.</summary>
     public const int Fault = 3;
 
     /// <summary>The run record is refused.</summary>

@@ -9,11 +9,12 @@ internal static class CheckCommand
     public static Command Create(Terminal terminal)
     {
         var model = ModelArgument.Create();
-        var command = new Command("check", "Read a model, tell all its errors at once, and sum up what it holds. Nothing is simulated.") { model };
+        const string Purpose = "Read a model, tell all its errors at once, and sum up what it holds. Nothing is simulated.";
+        var command = new Command("check", Purpose) { model };
         command.SetAction(parsed =>
         {
-            if (ModelArgument.Read(parsed.GetRequiredValue(model), terminal) is not { Reading.Model: { } read }) return ExitCodes.InputRefused;
-            ModelSummary.Write(terminal.Out, read);
+            if (ModelArgument.Read(parsed.GetRequiredValue(model), terminal) is not { } input) return ExitCodes.InputRefused;
+            ModelSummary.Write(terminal.Out, input.Reading.Model!);
             return ExitCodes.Done;
         });
         return command;

@@ -16,7 +16,8 @@ internal static class ModelArgument
         {
             var input = ModelInput.Read(path);
             foreach (var diagnostic in input.Reading.Diagnostics) terminal.Error.WriteLine(diagnostic);
-            return input.Reading.Model is null || input.Reading.Diagnostics.Any(diagnostic => diagnostic.Severity == Severity.Error) ? null : input;
+            var isRefused = input.Reading.Diagnostics.Any(diagnostic => diagnostic.Severity == Severity.Error);
+            return isRefused || input.Reading.Model is null ? null : input;
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {

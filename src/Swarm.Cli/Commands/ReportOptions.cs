@@ -48,10 +48,12 @@ internal sealed class ReportOptions
             new RunReport(record, new RunReportOptions(errors, parsed.GetValue(_full))).Write(terminal.Out);
         terminal.Out.Flush();
         if (parsed.GetValue(_plot) is not { } folder) return ExitCodes.Done;
-        if (!Typeface.IsPresent) terminal.Tell("this machine has no fonts, so the pictures have no text; install one, such as fonts-dejavu-core");
-        return FileFaults.Guard(terminal, folder.FullName, () =>
+        if (!Typeface.IsPresent)
+            terminal.Tell("this machine has no fonts, so the pictures have no text; install one, such as fonts-dejavu-core");
+        return FileFaults.Guard(terminal, folder.ToString(), () =>
         {
-            foreach (var file in PlotFiles.Write(record, errors, folder.FullName, cancellation)) terminal.Tell($"picture {file}");
+            foreach (var file in PlotFiles.Write(record, errors, folder.ToString(), cancellation))
+                terminal.Tell($"picture {file}");
         });
     }
 }

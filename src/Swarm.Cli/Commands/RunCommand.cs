@@ -55,11 +55,20 @@ internal sealed class RunCommand
 
     private Command Create()
     {
-        var command = new Command("run", "Simulate a model on this machine, show its figures, and keep a run record.") { _model, _trials, _seed, _threads, _out, _noRecord };
+        var command = new Command("run", "Simulate a model on this machine, show its figures, and keep a run record.")
+        {
+            _model,
+            _trials,
+            _seed,
+            _threads,
+            _out,
+            _noRecord,
+        };
         _report.AddTo(command);
         command.Validators.Add(result =>
         {
-            if (result.GetResult(_out) is not null && result.GetValue(_noRecord)) result.AddError("--out and --no-record exclude each other");
+            if (result.GetResult(_out) is not null && result.GetValue(_noRecord))
+                result.AddError("--out and --no-record exclude each other");
         });
         command.SetAction(RunAsync);
         return command;
@@ -78,8 +87,9 @@ internal sealed class RunCommand
         try
         {
             var outcome = await new WatchedRun(_terminal).ExecuteAsync(input.Reading.Model!, settings, cancellation);
-            if (outcome.Fault is not { } fault) return Report(parsed, input, settings, outcome, cancellation);
-            _terminal.Tell($"the run stopped at {fault}");
+            var reason = outcome.Fault is { } fault ? $"the run stopped at {fault}" : outcome.Refusal;
+            if (reason is null) return Report(parsed, input, settings, outcome, cancellation);
+            _terminal.Tell(reason);
             return ExitCodes.Fault;
         }
         catch (OperationCanceledException)

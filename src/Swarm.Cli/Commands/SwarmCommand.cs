@@ -36,7 +36,8 @@ internal static class SwarmCommand
             RunCommand.Create(terminal),
             ShowCommand.Create(terminal),
         };
-        foreach (var help in root.Options.Select(option => option.Action).OfType<HelpAction>()) help.MaxWidth = Output.RunReportOptions.Width;
+        foreach (var help in root.Options.Select(option => option.Action).OfType<HelpAction>())
+            help.MaxWidth = Output.RunReportOptions.Width;
         return root;
     }
 }

@@ -5,7 +5,8 @@ namespace Swarm.Cli.Output;
 /// <summary>All figures of one outcome, a line each: value, error, interval.</summary>
 internal sealed class FigureBlock
 {
-    private readonly TextTable _table = new(new TextColumn("", false), new TextColumn("figure"), new TextColumn("± error"), new TextColumn("95 % interval"));
+    private readonly TextTable _table = new(
+        new TextColumn("", false), new TextColumn("figure"), new TextColumn("± error"), new TextColumn("95 % interval"));
     private readonly List<string> _reasons = [];
 
     private FigureBlock()
@@ -35,7 +36,8 @@ internal sealed class FigureBlock
             block.Add($"above {NumberText.Short(above.Threshold)}", FigureText.InPercent(above.Probability), above.Probability.Reason);
         block._table.Write(output, width);
         block.WriteReasons(output, width);
-        Paragraph.Write(output, width, $"{NumberText.Plain(figures.Min)} to {NumberText.Plain(figures.Max)}", "  least and greatest trial: ");
+        var range = $"{NumberText.Plain(figures.Min)} to {NumberText.Plain(figures.Max)}";
+        Paragraph.Write(output, width, range, "  least and greatest trial: ");
     }
 
     /// <summary>Writes the one figure that an outcome of yes or no has.</summary>

@@ -20,9 +20,11 @@ internal readonly record struct FigureText(string Value, string Error, string In
     public static FigureText Of(Estimate figure) => Of(figure, "");
 
     /// <summary>The figure, a share of one, in per cent.</summary>
-    public static FigureText InPercent(Estimate figure) => Of(
-        figure with { Value = figure.Value * 100, StandardError = figure.StandardError * 100, Low = figure.Low * 100, High = figure.High * 100 },
-        " %");
+    public static FigureText InPercent(Estimate figure)
+    {
+        var (value, error, low, high, reason) = figure;
+        return Of(new Estimate(value * 100, error * 100, low * 100, high * 100, reason), " %");
+    }
 
     /// <summary>Value and error in one cell.</summary>
     public string Joined => Error == NoError ? Value : $"{Value} ± {Error}";

@@ -16,7 +16,7 @@ internal static class ModelSummary
         WriteDraws(output, model.Draws);
         WriteTriangles(output, model.Triangles);
         WriteNames(output, "Formulas", model.Formulas.Select(formula => formula.Name.ToString()));
-        WriteNames(output, "Outcomes", model.Outcomes.Select(outcome => new QuantityName(outcome.Name, outcome.Kind, outcome.Step).ToString()));
+        WriteNames(output, "Outcomes", model.Outcomes.Select(outcome => $"{new QuantityName(outcome.Name, outcome.Kind, outcome.Step)}"));
     }
 
     private static void WriteDraws(TextWriter output, IReadOnlyList<Draw> draws)
@@ -25,11 +25,15 @@ internal static class ModelSummary
         output.WriteLine();
         output.WriteLine("Draws, by closed form");
         var table = new TextTable(
-            new TextColumn("", false), new TextColumn("distribution", false), new TextColumn("mean"), new TextColumn("sd"), new TextColumn("skewness"));
+            new TextColumn("", false),
+            new TextColumn("distribution", false),
+            new TextColumn("mean"),
+            new TextColumn("sd"),
+            new TextColumn("skewness"));
         foreach (var draw in draws)
         {
-            var distribution = draw.Distribution;
-            table.Add(draw.Name.ToString(), NameOf(distribution), Number(distribution.Mean), Number(distribution.Sd), Number(distribution.Skewness));
+            var drawn = draw.Distribution;
+            table.Add($"{draw.Name}", NameOf(drawn), Number(drawn.Mean), Number(drawn.Sd), Number(drawn.Skewness));
         }
 
         table.Write(output, Width);

@@ -11,7 +11,13 @@ namespace Swarm.Cli.Output;
 /// <summary>A run record as one JSON document at full precision; docs/output.schema.json describes it.</summary>
 internal sealed class ResultJson
 {
-    private static readonly JsonWriterOptions Layout = new() { Indented = true, Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping, NewLine = "\n" };
+    private static readonly JsonWriterOptions Layout = new()
+    {
+        Indented = true,
+        Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping,
+        NewLine = "\n",
+    };
+
     private readonly Utf8JsonWriter _json;
     private readonly RunRecord _record;
     private readonly ErrorMethod _errors;

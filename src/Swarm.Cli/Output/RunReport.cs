@@ -41,7 +41,7 @@ internal sealed class RunReport(RunRecord record, RunReportOptions options)
     {
         var expected = family.FirstOrDefault(part => part.Group == OutcomeGroup.Expected);
         foreach (var whole in family.Where(part => part.Group == OutcomeGroup.Whole)) WriteBlock(output, whole, expected);
-        foreach (var group in family.Where(part => part.Group is not (OutcomeGroup.Whole or OutcomeGroup.Expected)).GroupBy(part => part.Group))
+        foreach (var group in family.Where(IsPart).GroupBy(part => part.Group))
         {
             if (options.Full)
                 foreach (var part in group) WriteBlock(output, part, null);
@@ -77,10 +77,12 @@ internal sealed class RunReport(RunRecord record, RunReportOptions options)
         output.WriteLine();
         output.WriteLine("Notes");
         foreach (var note in record.Notes) Paragraph.Write(output, Width, note.Text, "  - ");
-        if (!options.Full && record.Outcomes.Any(outcome => outcome.Group is not (OutcomeGroup.Whole or OutcomeGroup.Expected)))
+        if (!options.Full && record.Outcomes.Any(IsPart))
             Paragraph.Write(output, Width, "Intervals of the parts, and what a part leaves out here, come with --full or --json.", "  - ");
         foreach (var caution in Cautions.Lines) Paragraph.Write(output, Width, caution, "  - ");
     }
+
+    private static bool IsPart(ReportedResult outcome) => outcome.Group is not (OutcomeGroup.Whole or OutcomeGroup.Expected);
 
     private static string TitleOf(ReportedResult outcome) => $"{outcome.Result.Request.Name}{SideOf(outcome)}";
 

@@ -41,8 +41,10 @@ internal static class DensityPlot
         curve.FillColor = Palette.SkyBlue.WithAlpha(0.35);
         curve.LineColor = Palette.Blue;
         curve.LineWidth = 2;
-        if (estimate.Atoms.Count > 0) curve.LegendText = $"{NumberText.Percent(Math.Round(1 - estimate.Atoms.Sum(atom => atom.Share), 4))} of trials elsewhere";
         Sheet.HideHeights(plot);
+        if (estimate.Atoms.Count == 0) return;
+        var elsewhere = Math.Round(1 - estimate.Atoms.Sum(atom => atom.Share), 4);
+        curve.LegendText = $"{NumberText.Percent(elsewhere)} of trials elsewhere";
     }
 
     /// <summary>Levels at one value share a line.</summary>

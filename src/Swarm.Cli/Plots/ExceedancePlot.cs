@@ -52,7 +52,7 @@ internal static class ExceedancePlot
         band.FillColor = Palette.Orange.WithAlpha(0.55);
         band.LineColor = Palette.Orange;
         band.LineWidth = 1;
-        band.LegendText = "95 % band of sampling error";
+        band.LegendText = "95 % band";
     }
 
     private static void NameProbabilities(Plot plot, double lowest)

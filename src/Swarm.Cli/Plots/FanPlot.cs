@@ -33,7 +33,8 @@ internal static class FanPlot
         mean.LegendText = "mean";
         Sheet.Name(plot, [.. parts.Select(part => part.Label)]);
         plot.Axes.SetLimitsX(-0.3, parts.Count - 0.7);
-        if (parts.All(part => part.Result.Summary.Moments.Min >= 0)) plot.Axes.SetLimitsY(0, Quantiles(parts, 1 - Bands[0].Tail).Max() * Headroom);
+        if (parts.All(part => part.Result.Summary.Moments.Min >= 0))
+            plot.Axes.SetLimitsY(0, Quantiles(parts, 1 - Bands[0].Tail).Max() * Headroom);
         plot.ShowLegend(Edge.Right);
         return plot;
     }

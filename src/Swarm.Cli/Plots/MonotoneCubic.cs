@@ -1,6 +1,9 @@
 namespace Swarm.Cli.Plots;
 
-/// <summary>A smooth curve through rising points that rises between them, too (Fritsch &amp; Carlson 1980, with the slopes of Fritsch &amp; Butland 1984).</summary>
+/// <summary>
+/// A smooth curve through rising points that rises between them, too (Fritsch &amp; Carlson 1980, with the slopes of
+/// Fritsch &amp; Butland 1984).
+/// </summary>
 internal sealed class MonotoneCubic
 {
     private readonly double[] _x;

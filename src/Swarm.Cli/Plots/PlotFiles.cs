@@ -29,7 +29,9 @@ internal static class PlotFiles
 
     /// <summary>An outcome's name as the name of a file: letters, digits, dots and dashes alone.</summary>
     public static string FileName(string name) =>
-        new string([.. name.Select(letter => char.IsAsciiLetterOrDigit(letter) || letter is '.' or '-' or '_' ? letter : '-')]).Trim('.', '-');
+        new string([.. name.Select(letter => IsPlain(letter) ? letter : '-')]).Trim('.', '-');
+
+    private static bool IsPlain(char letter) => char.IsAsciiLetterOrDigit(letter) || letter is '.' or '-' or '_';
 
     private static string Unused(string name, HashSet<string> taken)
     {
@@ -44,10 +46,11 @@ internal static class PlotFiles
         {
             foreach (var outcome in family.Where(part => part.Group == OutcomeGroup.Whole).Concat(LastStep(family)))
             {
-                var axis = AxisOf(record, outcome, outcome.Result.Request.Name);
-                yield return ($"{outcome.Result.Request.Name}-density", () => DensityPlot.Draw(outcome.Result, Figures.Of(outcome.Result, errors), axis));
-                if (outcome.Result.Summary.Digest.Count > 2)
-                    yield return ($"{outcome.Result.Request.Name}-exceedance", () => ExceedancePlot.Draw(outcome.Result, errors, axis));
+                var result = outcome.Result;
+                var name = result.Request.Name;
+                var axis = AxisOf(record, outcome, name);
+                yield return ($"{name}-density", () => DensityPlot.Draw(result, Figures.Of(result, errors), axis));
+                if (result.Summary.Digest.Count > 2) yield return ($"{name}-exceedance", () => ExceedancePlot.Draw(result, errors, axis));
             }
 
             if (Fan(record, family, OutcomeGroup.Calendar, "payments", "calendar period") is { } payments) yield return payments;

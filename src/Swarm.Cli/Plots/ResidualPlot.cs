@@ -19,7 +19,7 @@ internal static class ResidualPlot
         dots.MarkerShape = MarkerShape.OpenCircle;
         dots.MarkerLineWidth = 1.5f;
         dots.LegendText = "residual of a cell";
-        double[] means = [.. places.Select((_, place) => residuals.Where((_, i) => (int)where[i] == place).DefaultIfEmpty(double.NaN).Average())];
+        double[] means = [.. places.Select((_, place) => residuals.Where((_, i) => (int)where[i] == place).Average())];
         var line = plot.Add.Scatter([.. Enumerable.Range(0, places.Count).Select(i => (double)i)], means, Palette.Vermilion);
         line.LineWidth = 2;
         line.LegendText = "mean";
@@ -30,7 +30,9 @@ internal static class ResidualPlot
     }
 
     private static readonly Comparer<string> PlaceOrder = Comparer<string>.Create(
-        (left, right) => double.TryParse(left, out var a) && double.TryParse(right, out var b) ? a.CompareTo(b) : string.CompareOrdinal(left, right));
+        (left, right) => double.TryParse(left, out var a) && double.TryParse(right, out var b)
+            ? a.CompareTo(b)
+            : string.CompareOrdinal(left, right));
 
     private static int Index(IReadOnlyList<string> places, string name) => places.TakeWhile(place => place != name).Count();
 

@@ -19,7 +19,8 @@ internal sealed class WatchedRun(Terminal terminal)
         try
         {
             var outcome = await Task.Run(() => Run(model, settings, finished, cancellation), CancellationToken.None);
-            if (outcome.Fault is null) terminal.Tell(ProgressText.Closing(settings.Trials, terminal.Clock.GetElapsedTime(start)));
+            if (outcome is { Fault: null, Refusal: null })
+                terminal.Tell(ProgressText.Closing(settings.Trials, terminal.Clock.GetElapsedTime(start)));
             return outcome;
         }
         finally
@@ -49,7 +50,8 @@ internal sealed class WatchedRun(Terminal terminal)
         {
             while (await TickAsync(timer, finished))
             {
-                if (Volatile.Read(ref _latest) is { } progress) live.UpdateTarget(Picture(progress, featured, terminal.Clock.GetElapsedTime(start)));
+                if (Volatile.Read(ref _latest) is { } progress)
+                    live.UpdateTarget(Picture(progress, featured, terminal.Clock.GetElapsedTime(start)));
             }
         });
     }

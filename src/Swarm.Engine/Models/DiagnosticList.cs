@@ -42,7 +42,11 @@ internal sealed class DiagnosticList
         {
             SourcePosition last = ordered[^1].Position;
             Severity severity = HasErrors ? Severity.Error : Severity.Warning;
-            ordered.Add(new Diagnostic(severity, last, $"there is more: only the first {ModelBounds.Diagnostics} errors and warnings are told", "mend these and check again"));
+            ordered.Add(new Diagnostic(
+                severity,
+                last,
+                $"there is more: only the first {ModelBounds.Diagnostics} errors and warnings are told",
+                "mend these and check again"));
         }
 
         return ordered;

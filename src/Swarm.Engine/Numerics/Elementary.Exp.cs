@@ -1,4 +1,5 @@
 using System.Runtime.CompilerServices;
+using static Swarm.Engine.Numerics.Polynomial;
 
 namespace Swarm.Engine.Numerics;
 
@@ -82,9 +83,9 @@ internal static partial class Elementary
     {
         var r2 = r * r;
         var r4 = r2 * r2;
-        return Polynomial.Two(r, 2.7630307385358087e-07, 2.5000338080436436e-08)
-            .Over(r4, Polynomial.Four(r, r2, 0.0013888888943753548, 0.00019841269506194506, 2.4801492950434905e-05, 2.755758605799561e-06))
-            .Over(r4, Polynomial.Four(r, r2, 0.5000000000000011, 0.1666666666666641, 0.04166666666652979, 0.008333333333495056));
+        return Two(r, 2.7630307385358087e-07, 2.5000338080436436e-08)
+            .Over(r4, Four(r, r2, 0.0013888888943753548, 0.00019841269506194506, 2.4801492950434905e-05, 2.755758605799561e-06))
+            .Over(r4, Four(r, r2, 0.5000000000000011, 0.1666666666666641, 0.04166666666652979, 0.008333333333495056));
     }
 
     /// <summary>x * 2^k in two exact halves, so that only a subnormal or infinite result rounds.</summary>
@@ -139,9 +140,9 @@ internal static partial class Elementary
     {
         var r2 = r * r;
         var r4 = r2 * r2;
-        return Polynomial.Two(r, 2.5109068289662572e-08, 2.092448800623241e-09)
-            .Over(r4, Polynomial.Four(r, r2, 0.0001984126988619239, 2.4801587360721463e-05, 2.755724413016392e-06, 2.755724261681134e-07))
-            .Over(r4, Polynomial.Four(r, r2, 0.16666666666666677, 0.0416666666666667, 0.00833333333332161, 0.0013888888888866757))
+        return Two(r, 2.5109068289662572e-08, 2.092448800623241e-09)
+            .Over(r4, Four(r, r2, 0.0001984126988619239, 2.4801587360721463e-05, 2.755724413016392e-06, 2.755724261681134e-07))
+            .Over(r4, Four(r, r2, 0.16666666666666677, 0.0416666666666667, 0.00833333333332161, 0.0013888888888866757))
             .Over(r, V.Create(0.5));
     }
 }

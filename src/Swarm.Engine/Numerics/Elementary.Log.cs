@@ -1,4 +1,5 @@
 using System.Runtime.CompilerServices;
+using static Swarm.Engine.Numerics.Polynomial;
 
 namespace Swarm.Engine.Numerics;
 
@@ -60,8 +61,8 @@ internal static partial class Elementary
     {
         var z2 = z * z;
         var z4 = z2 * z2;
-        return Polynomial.Three(z, z2, 0.18183569820607617, 0.15313901097975893, 0.1479752973791556)
-            .Over(z4, Polynomial.Four(z, z2, 0.6666666666666735, 0.3999999999941106, 0.28571428743274635, 0.2222219847453862));
+        return Three(z, z2, 0.18183569820607617, 0.15313901097975893, 0.1479752973791556)
+            .Over(z4, Four(z, z2, 0.6666666666666735, 0.3999999999941106, 0.28571428743274635, 0.2222219847453862));
     }
 
     /// <summary>
@@ -77,8 +78,8 @@ internal static partial class Elementary
         var s = (m - V.Create(1.0)) / (m + V.Create(1.0));
         var z = s * s;
         var z2 = z * z;
-        var series = Polynomial.Three(z, z2, 0.22223375231298306, 0.18123521703051193, 0.1682134081311993)
-            .Over(z2 * z2, Polynomial.Four(z, z2, 2.0, 0.6666666666658673, 0.40000000052539725, 0.2857141708298968));
+        var series = Three(z, z2, 0.22223375231298306, 0.18123521703051193, 0.1682134081311993)
+            .Over(z2 * z2, Four(z, z2, 2.0, 0.6666666666658673, 0.40000000052539725, 0.2857141708298968));
         return V.FusedMultiplyAdd(k, V.Create(Ln2), s * series);
     }
 

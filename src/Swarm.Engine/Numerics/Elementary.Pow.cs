@@ -1,4 +1,5 @@
 using System.Runtime.CompilerServices;
+using static Swarm.Engine.Numerics.Polynomial;
 
 namespace Swarm.Engine.Numerics;
 
@@ -82,8 +83,8 @@ internal static partial class Elementary
     {
         var z2 = z * z;
         var z4 = z2 * z2;
-        return Polynomial.Four(z, z2, 0.15384556646748745, 0.1333632611523353, 0.11674641054830442, 0.11990496200895435)
-            .Over(z4, Polynomial.Four(z, z2, 0.3999999999999998, 0.2857142857144522, 0.2222222221751049, 0.18181818873561895));
+        return Four(z, z2, 0.15384556646748745, 0.1333632611523353, 0.11674641054830442, 0.11990496200895435)
+            .Over(z4, Four(z, z2, 0.3999999999999998, 0.2857142857144522, 0.2222222221751049, 0.18181818873561895));
     }
 
     /// <summary>Any base and exponent.</summary>

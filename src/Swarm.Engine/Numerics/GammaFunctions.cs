@@ -80,7 +80,9 @@ internal static class GammaFunctions
     }
 
     private static double ByStirling(double x)
-        => double.IsPositiveInfinity(x) ? x : Math.FusedMultiplyAdd(x - 0.5, Elementary.Log(x) - 1, HalfLog2Pi - 0.5 + StirlingRest(x));
+        => double.IsPositiveInfinity(x)
+            ? x
+            : Math.FusedMultiplyAdd(x - 0.5, Elementary.Log(x) - 1, HalfLog2Pi - 0.5 + StirlingRest(x));
 
     private static double StirlingRest(double x)
     {

@@ -60,7 +60,8 @@ internal readonly unsafe struct Lanes128 : ILanes<Lanes128>
     public static Lanes128 operator ~(Lanes128 a) => new(~a._v);
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static Lanes128 FusedMultiplyAdd(Lanes128 a, Lanes128 b, Lanes128 c) => new(Vector128.FusedMultiplyAdd(a._v, b._v, c._v));
+    public static Lanes128 FusedMultiplyAdd(Lanes128 a, Lanes128 b, Lanes128 c)
+        => new(Vector128.FusedMultiplyAdd(a._v, b._v, c._v));
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes128 Sqrt(Lanes128 a) => new(Vector128.Sqrt(a._v));
@@ -99,12 +100,15 @@ internal readonly unsafe struct Lanes128 : ILanes<Lanes128>
     public static Lanes128 SubtractIntegers(Lanes128 a, Lanes128 b) => new((a._v.AsUInt64() - b._v.AsUInt64()).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static Lanes128 MultiplyLow32(Lanes128 a, Lanes128 b) => new(Sse2.IsSupported ? Sse2.Multiply(a._v.AsUInt32(), b._v.AsUInt32()).AsDouble() : 
-        ((a._v.AsUInt64() & Vector128.Create(0xFFFFFFFFUL)) * (b._v.AsUInt64() & Vector128.Create(0xFFFFFFFFUL))).AsDouble());
+    public static Lanes128 MultiplyLow32(Lanes128 a, Lanes128 b)
+        => new(Sse2.IsSupported ? Sse2.Multiply(a._v.AsUInt32(), b._v.AsUInt32()).AsDouble() : (Low32(a) * Low32(b)).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes128 ShiftLeft(Lanes128 a, int bits) => new(Vector128.ShiftLeft(a._v.AsUInt64(), bits).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes128 ShiftRight(Lanes128 a, int bits) => new(Vector128.ShiftRightLogical(a._v.AsUInt64(), bits).AsDouble());
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static Vector128<ulong> Low32(Lanes128 a) => a._v.AsUInt64() & Vector128.Create(0xFFFFFFFFUL);
 }

@@ -60,7 +60,8 @@ internal readonly unsafe struct Lanes256 : ILanes<Lanes256>
     public static Lanes256 operator ~(Lanes256 a) => new(~a._v);
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static Lanes256 FusedMultiplyAdd(Lanes256 a, Lanes256 b, Lanes256 c) => new(Vector256.FusedMultiplyAdd(a._v, b._v, c._v));
+    public static Lanes256 FusedMultiplyAdd(Lanes256 a, Lanes256 b, Lanes256 c)
+        => new(Vector256.FusedMultiplyAdd(a._v, b._v, c._v));
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes256 Sqrt(Lanes256 a) => new(Vector256.Sqrt(a._v));
@@ -99,12 +100,15 @@ internal readonly unsafe struct Lanes256 : ILanes<Lanes256>
     public static Lanes256 SubtractIntegers(Lanes256 a, Lanes256 b) => new((a._v.AsUInt64() - b._v.AsUInt64()).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static Lanes256 MultiplyLow32(Lanes256 a, Lanes256 b) => new(Avx2.IsSupported ? Avx2.Multiply(a._v.AsUInt32(), b._v.AsUInt32()).AsDouble() : 
-        ((a._v.AsUInt64() & Vector256.Create(0xFFFFFFFFUL)) * (b._v.AsUInt64() & Vector256.Create(0xFFFFFFFFUL))).AsDouble());
+    public static Lanes256 MultiplyLow32(Lanes256 a, Lanes256 b)
+        => new(Avx2.IsSupported ? Avx2.Multiply(a._v.AsUInt32(), b._v.AsUInt32()).AsDouble() : (Low32(a) * Low32(b)).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes256 ShiftLeft(Lanes256 a, int bits) => new(Vector256.ShiftLeft(a._v.AsUInt64(), bits).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes256 ShiftRight(Lanes256 a, int bits) => new(Vector256.ShiftRightLogical(a._v.AsUInt64(), bits).AsDouble());
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static Vector256<ulong> Low32(Lanes256 a) => a._v.AsUInt64() & Vector256.Create(0xFFFFFFFFUL);
 }

@@ -60,7 +60,8 @@ internal readonly unsafe struct Lanes512 : ILanes<Lanes512>
     public static Lanes512 operator ~(Lanes512 a) => new(~a._v);
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static Lanes512 FusedMultiplyAdd(Lanes512 a, Lanes512 b, Lanes512 c) => new(Vector512.FusedMultiplyAdd(a._v, b._v, c._v));
+    public static Lanes512 FusedMultiplyAdd(Lanes512 a, Lanes512 b, Lanes512 c)
+        => new(Vector512.FusedMultiplyAdd(a._v, b._v, c._v));
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes512 Sqrt(Lanes512 a) => new(Vector512.Sqrt(a._v));
@@ -100,12 +101,17 @@ internal readonly unsafe struct Lanes512 : ILanes<Lanes512>
     public static Lanes512 SubtractIntegers(Lanes512 a, Lanes512 b) => new((a._v.AsUInt64() - b._v.AsUInt64()).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static Lanes512 MultiplyLow32(Lanes512 a, Lanes512 b) => new(Avx512F.IsSupported ? Avx512F.Multiply(a._v.AsUInt32(), b._v.AsUInt32()).AsDouble() : 
-        ((a._v.AsUInt64() & Vector512.Create(0xFFFFFFFFUL)) * (b._v.AsUInt64() & Vector512.Create(0xFFFFFFFFUL))).AsDouble());
+    public static Lanes512 MultiplyLow32(Lanes512 a, Lanes512 b)
+        => new(Avx512F.IsSupported
+            ? Avx512F.Multiply(a._v.AsUInt32(), b._v.AsUInt32()).AsDouble()
+            : (Low32(a) * Low32(b)).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes512 ShiftLeft(Lanes512 a, int bits) => new(Vector512.ShiftLeft(a._v.AsUInt64(), bits).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static Lanes512 ShiftRight(Lanes512 a, int bits) => new(Vector512.ShiftRightLogical(a._v.AsUInt64(), bits).AsDouble());
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static Vector512<ulong> Low32(Lanes512 a) => a._v.AsUInt64() & Vector512.Create(0xFFFFFFFFUL);
 }

@@ -1,4 +1,5 @@
 using System.Runtime.CompilerServices;
+using static Swarm.Engine.Numerics.Polynomial;
 
 namespace Swarm.Engine.Numerics;
 
@@ -27,8 +28,8 @@ internal static partial class NormalFunctions
     }
 
     /// <summary>
-    /// <see cref="Quantile{V}(V)"/>, to the bit, with a cheaper test: for u strictly between 0 and 1 alone, as every uniform of the
-    /// streams is.
+    /// <see cref="Quantile{V}(V)"/>, to the bit, with a cheaper test: for u strictly between 0 and 1 alone, as every uniform
+    /// of the streams is.
     /// </summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static V QuantileOfOpenUniform<V>(V u)
@@ -56,11 +57,11 @@ internal static partial class NormalFunctions
         var l2 = l * l;
         var l4 = l2 * l2;
         return V.Create(1.622159634386052e-19)
-            .Over(l4, Polynomial.Four(l, l2, 1.2733703862049002e-13, 9.239421941517018e-15, 4.423936412947781e-16, 1.2619214748358747e-17))
-            .Over(l4, Polynomial.Four(l, l2, 9.841803867967394e-11, 3.3994253596300884e-11, 7.830297364777272e-12, 1.2045512238913747e-12))
-            .Over(l4, Polynomial.Four(l, l2, -3.0828674648313896e-08, 2.157545873985478e-09, 1.4001426279654513e-09, 2.8887897431979633e-10))
-            .Over(l4, Polynomial.Four(l, l2, -6.59183091149338e-05, 2.85726859934684e-06, 1.4330114936163498e-06, -5.1348927953538154e-08))
-            .Over(l4, Polynomial.Four(l, l2, -0.3281168738691922, 0.01633323614776268, 0.0033023324201379672, -0.0001810805059478576))
+            .Over(l4, Four(l, l2, 1.2733703862049002e-13, 9.239421941517018e-15, 4.423936412947781e-16, 1.2619214748358747e-17))
+            .Over(l4, Four(l, l2, 9.841803867967394e-11, 3.3994253596300884e-11, 7.830297364777272e-12, 1.2045512238913747e-12))
+            .Over(l4, Four(l, l2, -3.0828674648313896e-08, 2.157545873985478e-09, 1.4001426279654513e-09, 2.8887897431979633e-10))
+            .Over(l4, Four(l, l2, -6.59183091149338e-05, 2.85726859934684e-06, 1.4330114936163498e-06, -5.1348927953538154e-08))
+            .Over(l4, Four(l, l2, -0.3281168738691922, 0.01633323614776268, 0.0033023324201379672, -0.0001810805059478576))
             .Over(l, V.Create(1.2533141373155003));
     }
 
@@ -121,7 +122,8 @@ internal static partial class NormalFunctions
             tail = V.Select(V.LessThan(V.Create(6.0), y), far, tail);
         }
 
-        var result = V.Select(V.LessThan(product, V.Create(CentralLimit)), LaneMath.CopySign(tail, v), CentralQuantile(u, product));
+        var inTail = V.LessThan(product, V.Create(CentralLimit));
+        var result = V.Select(inTail, LaneMath.CopySign(tail, v), CentralQuantile(u, product));
         result = V.Select(V.EqualTo(u, zero), -infinity, result);
         result = V.Select(V.EqualTo(u, one), infinity, result);
         return V.Select(V.LessThanOrEqual(zero, u) & V.LessThanOrEqual(u, one), result, LaneMath.NaN<V>());

@@ -1,4 +1,5 @@
 using System.Runtime.CompilerServices;
+using static Swarm.Engine.Numerics.Polynomial;
 
 namespace Swarm.Engine.Numerics;
 
@@ -12,7 +13,8 @@ internal static partial class NormalFunctions
     public static double Quantile(double u) => Quantile(Lanes64.Create(u)).Value;
 
     /// <summary>
-    /// P(Z &lt;= x), within 5 ulp; the lower tail keeps its relative accuracy down to the subnormals. cdf(-inf) = 0, cdf(+inf) = 1.
+    /// P(Z &lt;= x), within 5 ulp; the lower tail keeps its relative accuracy down to the subnormals.
+    /// cdf(-inf) = 0, cdf(+inf) = 1.
     /// </summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     public static V Cdf<V>(V x)
@@ -46,12 +48,12 @@ internal static partial class NormalFunctions
     {
         var t2 = t * t;
         var t4 = t2 * t2;
-        return Polynomial.Two(t, -19456415589.09398, -88266357661.08592)
-            .Over(t4, Polynomial.Four(t, t2, 38012368.23200049, -1474772373.9440808, 1478743825.6319575, 14859136595.828505))
-            .Over(t4, Polynomial.Four(t, t2, 2374649.6187821454, -7519285.393296799, -17529337.76152962, 113243706.66655988))
-            .Over(t4, Polynomial.Four(t, t2, 28591.7911662689, -38832.087073992174, -263102.75560239365, 484420.0755429014))
-            .Over(t4, Polynomial.Four(t, t2, 173.9935066581106, -1178.0301681370402, -3063.1783576278413, 5393.644577852974))
-            .Over(t4, Polynomial.Four(t, t2, 5.479691568341166, 28.31247048597246, 107.3086717120654, 259.71478766238073))
+        return Two(t, -19456415589.09398, -88266357661.08592)
+            .Over(t4, Four(t, t2, 38012368.23200049, -1474772373.9440808, 1478743825.6319575, 14859136595.828505))
+            .Over(t4, Four(t, t2, 2374649.6187821454, -7519285.393296799, -17529337.76152962, 113243706.66655988))
+            .Over(t4, Four(t, t2, 28591.7911662689, -38832.087073992174, -263102.75560239365, 484420.0755429014))
+            .Over(t4, Four(t, t2, 173.9935066581106, -1178.0301681370402, -3063.1783576278413, 5393.644577852974))
+            .Over(t4, Four(t, t2, 5.479691568341166, 28.31247048597246, 107.3086717120654, 259.71478766238073))
             .Over(t, V.Create(0.8153383968425169));
     }
 }

@@ -13,7 +13,8 @@ internal static class ResidualTables
         yield return Groups(name, "residuals-by-development", "residuals by development period", "development", table.ByDevelopment);
         yield return Groups(name, "residuals-by-calendar", "residuals by calendar period", "calendar", table.ByCalendar);
         yield return CalendarYears(name, CalendarYearTest.Of(fit.ChainLadder.Ratios));
-        yield return Cells(name, fit.ChainLadder.Triangle, [.. table.Residuals.Where(residual => residual is { IsCounted: true, IsZeroByConstruction: false })]);
+        Residual[] telling = [.. table.Residuals.Where(residual => residual is { IsCounted: true, IsZeroByConstruction: false })];
+        yield return Cells(name, fit.ChainLadder.Triangle, telling);
     }
 
     private static ReportTable Groups(string name, string code, string title, string heading, IReadOnlyList<ResidualGroup> groups) => new(

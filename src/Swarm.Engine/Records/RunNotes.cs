@@ -20,7 +20,9 @@ public static class RunNotes
     {
         ReservingOptions options = input.Options;
         return options.Method == ReservingMethod.Mack
-            ? $"{input.Name}: simulation of Mack's model (Mack 1993, 1999); {ProcessOf(options)} process error; {RatiosOf(options)}{TailOf(options)}."
+            ? $"{input.Name}: simulation of Mack's model (Mack 1993, 1999); factors drawn given the observed triangle (conditional "
+                + "resampling, Buchwalder, Bühlmann, Merz & Wüthrich 2006), payments step by step with the conditional mean and "
+                + $"variance; {ProcessOf(options)} process error; {RatiosOf(options)}{TailOf(options)}."
             : $"{input.Name}: residual bootstrap of the over-dispersed Poisson model (England & Verrall 1999, 2002); "
                 + $"{ProcessOf(options)} process error; {ScaleOf(options)}; residuals that are zero by construction "
                 + $"{(options.KeepZeroResiduals ? "kept" : "left out")}; residuals {(options.CentreResiduals ? "centred" : "not centred")}; "

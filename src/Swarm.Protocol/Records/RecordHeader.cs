@@ -38,10 +38,11 @@ internal static class RecordHeader
         if (file.Length == 0) return new RecordFault(RecordFaultKind.Truncated, "the file is empty");
         var mark = file[..Math.Min(file.Length, Mark.Length)];
         if (!Mark.StartsWith(mark)) return new RecordFault(RecordFaultKind.Foreign, "the file is not a run record");
-        if (file.Length < Length) return new RecordFault(RecordFaultKind.Truncated, $"the file ends within its header, after {file.Length} bytes");
+        if (file.Length < Length)
+            return new RecordFault(RecordFaultKind.Truncated, $"the file ends within its header, after {file.Length} bytes");
         var format = BinaryPrimitives.ReadUInt32LittleEndian(file[FormatOffset..]);
         if (format > Format)
-            return new RecordFault(RecordFaultKind.Newer, $"the record has format {format}, this program reads up to format {Format}; use a later swarm");
+            return Newer(format);
         var promised = BinaryPrimitives.ReadUInt64LittleEndian(file[LengthOffset..]);
         var present = (ulong)(file.Length - Length);
         if (present < promised)
@@ -50,6 +51,9 @@ internal static class RecordHeader
             ? null
             : new RecordFault(RecordFaultKind.Damaged, "the contents do not match their checksum");
     }
+
+    private static RecordFault Newer(uint format) => new(
+        RecordFaultKind.Newer, $"the record has format {format}, this program reads up to format {Format}; use a later swarm");
 
     private static bool ChecksumMatches(ReadOnlySpan<byte> file)
     {

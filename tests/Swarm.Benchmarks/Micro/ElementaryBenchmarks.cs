@@ -3,7 +3,7 @@ using Swarm.Engine.Numerics;
 
 namespace Swarm.Benchmarks.Micro;
 
-/// <summary>The elementary functions over columns in the first-level cache; the baseline is the platform's exp, value by value.</summary>
+/// <summary>The elementary functions over columns in the first-level cache; the baseline is the platform's exp.</summary>
 public unsafe class ElementaryBenchmarks
 {
     private const int Count = 1024;

@@ -83,6 +83,23 @@ public sealed class RunCommandTests : IDisposable
     }
 
     [Fact]
+    public async Task A_run_whose_result_is_refused_says_why_and_keeps_nothing()
+    {
+        var code = await _swarm.RunAsync(
+            (_, _, _, _) => new RunOutcome { Refusal = "motor: drawn again too often" },
+            CancellationToken.None,
+            "run",
+            Fund(),
+            "--out",
+            _swarm.PathOf("x.swarm"));
+
+        Assert.Equal(3, code);
+        Assert.Equal("", _swarm.Out);
+        Assert.Equal("swarm: motor: drawn again too often", _swarm.Error.TrimEnd());
+        Assert.False(File.Exists(_swarm.PathOf("x.swarm")));
+    }
+
+    [Fact]
     public async Task Stopping_leaves_nothing_behind()
     {
         using var interrupt = new CancellationTokenSource();
@@ -90,7 +107,9 @@ public sealed class RunCommandTests : IDisposable
             LocalRun.Execute(model, settings, _ => interrupt.Cancel(), cancellation);
 
         var code = await _swarm.RunAsync(
-            StopAtTheFirstLeaf, interrupt.Token, "run", Fund(), "--trials", "1_000_000_000", "--out", _swarm.PathOf("kept/x.swarm"), "--plot", _swarm.PathOf("plots"));
+            StopAtTheFirstLeaf,
+            interrupt.Token,
+            ["run", Fund(), "--trials", "1_000_000_000", "--out", _swarm.PathOf("kept/x.swarm"), "--plot", _swarm.PathOf("plots")]);
 
         Assert.Equal(130, code);
         Assert.Equal("", _swarm.Out);

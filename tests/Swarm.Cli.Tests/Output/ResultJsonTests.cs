@@ -83,7 +83,8 @@ public sealed class ResultJsonTests(SampleRecord sample) : IClassFixture<SampleR
     private static void Valid(string json)
     {
         var results = Schema.Evaluate(JsonDocument.Parse(json).RootElement, new EvaluationOptions { OutputFormat = OutputFormat.List });
-        var errors = (results.Details ?? []).Where(detail => detail.Errors is not null).Select(detail => $"{detail.InstanceLocation}: {string.Join(", ", detail.Errors!.Values)}");
+        var errors = (results.Details ?? []).Where(detail => detail.Errors is not null)
+            .Select(detail => $"{detail.InstanceLocation}: {string.Join(", ", detail.Errors!.Values)}");
         Assert.True(results.IsValid, string.Join(Environment.NewLine, errors));
     }
 }

@@ -36,13 +36,20 @@ internal static class SampleRuns
         Formulas =
         [
             Formula("shortfall", new CallExpression(Function.Max, [Number(0), Minus(Value("motor.unpaid"), Number(2_600))], Nowhere)),
-            Formula("ruined", new BinaryExpression(BinaryOperator.Less, new ReferenceExpression("fund", StepIndex.Horizon, 0, Nowhere), Number(20), Nowhere)),
+            Formula("ruined", new BinaryExpression(BinaryOperator.Less, LastFund(), Number(20), Nowhere)),
             new Formula(new QuantityName("fund", QuantityKind.AtStep, 0), Number(100), Nowhere),
             new Formula(new QuantityName("fund", QuantityKind.PerStep, 0), Fund(), Nowhere),
         ],
         Outcomes =
         [
-            new Outcome { Name = "motor.unpaid", Kind = QuantityKind.PerTrial, Above = [2_700], Levels = [0.5, 0.75, 0.9, 0.995], By = [Breakdown.Origin, Breakdown.Calendar] },
+            new Outcome
+            {
+                Name = "motor.unpaid",
+                Kind = QuantityKind.PerTrial,
+                Above = [2_700],
+                Levels = [0.5, 0.75, 0.9, 0.995],
+                By = [Breakdown.Origin, Breakdown.Calendar],
+            },
             new Outcome { Name = "shortfall", Kind = QuantityKind.PerTrial, Above = [0, 200, 50_000] },
             new Outcome { Name = "fund", Kind = QuantityKind.PerStep, Adverse = Adverse.Low },
             new Outcome { Name = "ruined", Kind = QuantityKind.PerTrial, IsMoney = false },
@@ -68,6 +75,8 @@ internal static class SampleRuns
             new ReferenceExpression("growth", StepIndex.Current, 0, Nowhere),
             Nowhere),
         Number(8));
+
+    private static ReferenceExpression LastFund() => new("fund", StepIndex.Horizon, 0, Nowhere);
 
     private static Formula Formula(string name, Expression body) => new(new QuantityName(name, QuantityKind.PerTrial, 0), body, Nowhere);
 

@@ -25,7 +25,10 @@ internal static class Documents
             a => DistributionBinding.Of(Lognormal.OfMeanAndSd(a.Number("mean"), a.Number("sd")))),
         new(
             "lognormal",
-            [new("log_mean", ParameterKind.Number, "Mean of the logarithm."), new("log_sd", ParameterKind.Number, "Its standard deviation.")],
+            [new("log_mean", ParameterKind.Number, "Mean of the logarithm."), new(
+                "log_sd",
+                ParameterKind.Number,
+                "Its standard deviation.")],
             "Lognormal distribution by the moments of its logarithm.",
             a => DistributionBinding.Of(new Lognormal(a.Number("log_mean"), a.Number("log_sd")))),
         new(
@@ -49,7 +52,12 @@ internal static class Documents
 
     public static ModelReading Read(
         string text, Func<TriangleRequest, (Triangle? Triangle, IReadOnlyList<Diagnostic> Diagnostics)> triangles) =>
-        ModelReader.Read(FileName, text, name => name.EndsWith(".csv", StringComparison.Ordinal) ? new DataFile(name, [1, 2, 3]) : null, Forms, triangles);
+        ModelReader.Read(
+            FileName,
+            text,
+            name => name.EndsWith(".csv", StringComparison.Ordinal) ? new DataFile(name, [1, 2, 3]) : null,
+            Forms,
+            triangles);
 
     /// <summary>The model, which must have no error.</summary>
     public static Model Accepted(string text)

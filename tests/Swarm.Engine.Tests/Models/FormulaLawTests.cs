@@ -11,8 +11,15 @@ public class FormulaLawTests
 
     private static readonly Gen<Expression> Leaf = Gen.OneOf<Expression>(
         Gen.Int[0, 999].Select(n => (Expression)new NumberExpression(n / 8.0, Nowhere)),
-        Gen.Select(Gen.OneOf(Gen.Const("a"), Gen.Const("b_1"), Gen.Const("motor.unpaid.2021Q1")), Gen.Enum<StepIndex>(), Gen.Int[0, 99])
-            .Select((name, index, step) => (Expression)new ReferenceExpression(name, index, index == StepIndex.Fixed ? step : 0, Nowhere)));
+        Gen.Select(Gen.OneOf(
+            Gen.Const("a"),
+            Gen.Const("b_1"),
+            Gen.Const("motor.unpaid.2021Q1")), Gen.Enum<StepIndex>(), Gen.Int[0, 99])
+            .Select((name, index, step) => (Expression)new ReferenceExpression(
+                name,
+                index,
+                index == StepIndex.Fixed ? step : 0,
+                Nowhere)));
 
     private static readonly Gen<Expression> Any = Gen.Recursive<Expression>((depth, inner) => depth == 5
         ? Leaf

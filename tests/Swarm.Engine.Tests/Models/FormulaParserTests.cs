@@ -79,7 +79,12 @@ public class FormulaParserTests
         DiagnosticList diagnostics = new();
         Swarm.Engine.Models.Documents.SourceText source = new("model.yaml", "\n\n\n\n\n         " + formula);
         int start = source.Text.Length - formula.Length;
-        Swarm.Engine.Models.Documents.ScalarNode node = new(source, start, source.Text.Length, formula, YamlDotNet.Core.ScalarStyle.Plain);
+        Swarm.Engine.Models.Documents.ScalarNode node = new(
+            source,
+            start,
+            source.Text.Length,
+            formula,
+            YamlDotNet.Core.ScalarStyle.Plain);
         Expression? body = FormulaParser.Parse(node, diagnostics);
         Assert.True(body is not null, string.Join('\n', diagnostics.InOrder("model.yaml")));
         return body;

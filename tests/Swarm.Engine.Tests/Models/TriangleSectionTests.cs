@@ -95,6 +95,19 @@ public class TriangleSectionTests
     }
 
     [Fact]
+    public void A_triangle_that_the_method_cannot_be_used_on_is_refused_where_the_model_names_it()
+    {
+        Triangle exact = new(["2023", "2024", "2025"], [[100, 50, 15], [200, 100], [300]], 12);
+        string text = "model: m\ntriangles:\n  fire: {data: fire.csv, amounts: cumulative, method: odp_bootstrap}\noutcomes:\n  fire.unpaid: {}";
+
+        ModelReading reading = Documents.Read(text, _ => (exact, []));
+
+        Assert.Null(reading.Model);
+        Assert.Equal(new SourcePosition("model.yaml", 3, 3), reading.Diagnostics[0].Position);
+        Assert.Contains("no residual to resample", reading.Diagnostics[0].Message, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void A_triangle_is_broken_down_both_ways_unless_told_otherwise()
     {
         Model both = Documents.Accepted(Motor);

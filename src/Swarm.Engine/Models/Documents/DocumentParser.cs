@@ -12,6 +12,7 @@ internal sealed class DocumentParser
     private readonly SourceText _source;
     private readonly DiagnosticList _diagnostics;
     private readonly Parser _events;
+    private readonly EntryCheck _check;
     private readonly Dictionary<string, DocumentNode> _anchors = new(StringComparer.Ordinal);
     private int _nodes;
     private bool _stopped;
@@ -20,6 +21,7 @@ internal sealed class DocumentParser
     {
         _source = source;
         _diagnostics = diagnostics;
+        _check = new EntryCheck(diagnostics);
         _events = new Parser(new Scanner(new StringReader(source.Text), skipComments: true));
     }
 
@@ -106,7 +108,10 @@ internal sealed class DocumentParser
         ParsingEvent current = _events.Current!;
         if (++_nodes > ModelBounds.Nodes)
         {
-            return Stop(current, $"the document has more than {ModelBounds.Nodes:N0} entries, those that aliases repeat included", null);
+            return Stop(
+                current,
+                $"the document has more than {ModelBounds.Nodes:N0} entries, those that aliases repeat included",
+                null);
         }
 
         if (depth > ModelBounds.Nesting)
@@ -116,7 +121,10 @@ internal sealed class DocumentParser
 
         if (current is NodeEvent { Tag.IsEmpty: false } tagged)
         {
-            Error(tagged, $"tag {DiagnosticList.Quote(tagged.Tag.Value)} is not used in models", "remove it: values are read as they are written");
+            Error(
+                tagged,
+                $"tag {DiagnosticList.Quote(tagged.Tag.Value)} is not used in models",
+                "remove it: values are read as they are written");
         }
 
         return current switch
@@ -165,8 +173,6 @@ internal sealed class DocumentParser
         return node;
     }
 
-    private static bool IsCutCall(string text) => text.Count(c => c == '(') != text.Count(c => c == ')');
-
     private SequenceNode? Sequence(SequenceStart start, int depth)
     {
         Advance();
@@ -192,7 +198,7 @@ internal sealed class DocumentParser
         bool lostEntries = false;
         while (!_stopped && _events.Current is not MappingEnd)
         {
-            if (Entry(depth, inFlow) is { } entry && IsWelcome(entry, inFlow, entries))
+            if (Entry(depth, inFlow) is { } entry && _check.IsWelcome(entry, inFlow, entries))
             {
                 entries.Add(entry.Key.Text, entry);
                 ordered.Add(entry);
@@ -204,7 +210,9 @@ internal sealed class DocumentParser
         }
 
         Advance();
-        return _stopped ? null : new MappingNode(_source.PositionAt((int)start.Start.Index), ordered) { LostEntries = lostEntries };
+        return _stopped ? null : new MappingNode(
+            _source.PositionAt((int)start.Start.Index),
+            ordered) { LostEntries = lostEntries };
     }
 
     private MappingEntry? Entry(int depth, bool inFlow)
@@ -224,35 +232,6 @@ internal sealed class DocumentParser
 
         Error(start, "a key is a text, not a mapping or a list", SyntaxHint.BlockStyle);
         return null;
-    }
-
-    private bool IsWelcome(MappingEntry entry, bool inFlow, Dictionary<string, MappingEntry> entries)
-    {
-        string key = entry.Key.Text;
-        if (entry.Key.IsPlain && key == "<<")
-        {
-            _diagnostics.Error(entry.Key.Position, "merge keys are not used in models", "write the entries out");
-            return false;
-        }
-
-        if (entries.TryGetValue(key, out MappingEntry? first))
-        {
-            _diagnostics.Error(
-                entry.Key.Position, $"{DiagnosticList.Quote(key)} stands here twice, first in line {first.Key.Position.Line}", "keep one of them");
-            return false;
-        }
-
-        bool isCut = inFlow && (IsCutCall(key) || entry.Value is ScalarNode { IsPlain: true } value && IsCutCall(value.Text));
-        if (inFlow && !isCut && entry.Value is ScalarNode { IsNothing: true })
-        {
-            _diagnostics.Error(
-                entry.Key.Position,
-                $"{DiagnosticList.Quote(key)} has no value",
-                key.Contains(':') ? "leave a space behind the colon" : SyntaxHint.BlockStyle);
-            return false;
-        }
-
-        return !isCut;
     }
 
     private void Error(ParsingEvent at, string message, string? hint) =>

@@ -1,5 +1,4 @@
 using Swarm.Engine.Models.Documents;
-using Swarm.Engine.Models.Names;
 using Strength = Swarm.Engine.Models.Formulas.FormulaWords.Strength;
 
 namespace Swarm.Engine.Models.Formulas;
@@ -19,7 +18,10 @@ internal sealed class FormulaParser
         _source = source;
         if (source.Text.Length > ModelBounds.FormulaLength)
         {
-            throw new FormulaSyntaxException(0, $"the formula is longer than {ModelBounds.FormulaLength:N0} characters", "split it into several");
+            throw new FormulaSyntaxException(
+                0,
+                $"the formula is longer than {ModelBounds.FormulaLength:N0} characters",
+                "split it into several");
         }
 
         _token = Tokenizer.Next(source.Text, 0);
@@ -87,12 +89,17 @@ internal sealed class FormulaParser
     private Parsed Operation(int least)
     {
         Parsed left = Operand(least);
-        while (FormulaWords.Operators.TryGetValue(_token.Text, out (BinaryOperator Operator, int Strength) found) && found.Strength >= least)
+        while (FormulaWords.Operators.TryGetValue(_token.Text, out (BinaryOperator Operator, int Strength) found)
+            && found.Strength >= least)
         {
             Token symbol = Take();
             bool isRightAssociative = found.Strength == Strength.Power;
             Parsed right = isRightAssociative ? Deeper(() => Operation(found.Strength)) : Operation(found.Strength + 1);
-            left = Join(symbol, new BinaryExpression(found.Operator, left.Expression, right.Expression, left.Expression.Position), left, right);
+            left = Join(symbol, new BinaryExpression(
+                found.Operator,
+                left.Expression,
+                right.Expression,
+                left.Expression.Position), left, right);
             if (found.Strength == Strength.Comparison)
             {
                 RefuseChain(symbol);
@@ -104,7 +111,8 @@ internal sealed class FormulaParser
 
     private void RefuseChain(Token first)
     {
-        bool isChained = FormulaWords.Operators.TryGetValue(_token.Text, out (BinaryOperator, int Strength) next) && next.Strength == Strength.Comparison;
+        bool isChained = FormulaWords.Operators.TryGetValue(_token.Text, out (BinaryOperator, int Strength) next)
+            && next.Strength == Strength.Comparison;
         if (isChained)
         {
             throw new FormulaSyntaxException(
@@ -147,7 +155,10 @@ internal sealed class FormulaParser
 
         bool isGlued = _token.Start == token.End && _token.Kind is TokenKind.Name or TokenKind.Number;
         return isGlued
-            ? throw new FormulaSyntaxException(token.Start, $"{DiagnosticList.Quote(token.Text + _token.Text)} is neither a number nor a name", "a name begins with a letter")
+            ? throw new FormulaSyntaxException(
+                token.Start,
+                $"{DiagnosticList.Quote(token.Text + _token.Text)} is neither a number nor a name",
+                "a name begins with a letter")
             : new NumberExpression(value, PositionOf(token));
     }
 
@@ -164,7 +175,10 @@ internal sealed class FormulaParser
     {
         if (least > Strength.Not)
         {
-            throw new FormulaSyntaxException(_token.Start, "'not' inside a sum or comparison is hard to read", "put it in brackets: (not a)");
+            throw new FormulaSyntaxException(
+                _token.Start,
+                "'not' inside a sum or comparison is hard to read",
+                "put it in brackets: (not a)");
         }
 
         return Deeper(() =>
@@ -217,47 +231,20 @@ internal sealed class FormulaParser
         }
 
         Expect(")");
-        return Grown(open, Called(name, arguments), arguments.Select(a => a.Height).DefaultIfEmpty().Max());
+        return Grown(
+            open,
+            FormulaCall.Of(name, [.. arguments.Select(a => a.Expression)], PositionOf(name)),
+            arguments.Select(a => a.Height).DefaultIfEmpty().Max());
     }
-
-    private Expression Called(Token name, List<Parsed> arguments)
-    {
-        SourcePosition position = PositionOf(name);
-        if (FormulaWords.Reductions.TryGetValue(name.Text, out StepReduction reduction))
-        {
-            return arguments.Count == 1
-                ? new OverStepsExpression(reduction, arguments[0].Expression, position)
-                : throw new FormulaSyntaxException(name.Start, $"{name.Shown} takes one value with [t], not {arguments.Count}", ReductionHint(name.Text));
-        }
-
-        if (!FormulaWords.Functions.TryGetValue(name.Text, out (Function Function, int Least, int Most, string Form) function))
-        {
-            string[] known = [.. FormulaWords.Functions.Keys, .. FormulaWords.Reductions.Keys];
-            string? nearest = NearestName.Of(name.Text, known);
-            throw new FormulaSyntaxException(
-                name.Start, $"no function is called {name.Shown}", nearest is null ? $"known are {string.Join(", ", known)}" : $"did you mean '{nearest}'?");
-        }
-
-        return arguments.Count >= function.Least && arguments.Count <= function.Most
-            ? new CallExpression(function.Function, [.. arguments.Select(a => a.Expression)], position)
-            : throw new FormulaSyntaxException(name.Start, $"{name.Shown} is given {arguments.Count} {(arguments.Count == 1 ? "argument" : "arguments")}", $"write {function.Form}");
-    }
-
-    private static string ReductionHint(string name) => name switch
-    {
-        "sum" => "over values of one trial write a + b + c",
-        "mean" => "over values of one trial write (a + b) / 2",
-        "largest" => "over values of one trial write max(a, b)",
-        "smallest" => "over values of one trial write min(a, b)",
-        "any" => "over values of one trial write a or b",
-        _ => "over values of one trial write a and b",
-    };
 
     private Parsed Deeper(Func<Parsed> read)
     {
         if (++_depth > ModelBounds.FormulaNesting)
         {
-            throw new FormulaSyntaxException(_token.Start, $"brackets and signs lie more than {ModelBounds.FormulaNesting} deep", "split the formula");
+            throw new FormulaSyntaxException(
+                _token.Start,
+                $"brackets and signs lie more than {ModelBounds.FormulaNesting} deep",
+                "split the formula");
         }
 
         Parsed result = read();
@@ -271,7 +258,10 @@ internal sealed class FormulaParser
     private static Parsed Grown(Token at, Expression expression, int height) =>
         height < ModelBounds.FormulaHeight
             ? new Parsed(expression, height + 1)
-            : throw new FormulaSyntaxException(at.Start, $"more than {ModelBounds.FormulaHeight:N0} operations follow from each other", "split the formula");
+            : throw new FormulaSyntaxException(
+                at.Start,
+                $"more than {ModelBounds.FormulaHeight:N0} operations follow from each other",
+                "split the formula");
 
     /// <summary>An expression and the height of its tree.</summary>
     private readonly record struct Parsed(Expression Expression, int Height);

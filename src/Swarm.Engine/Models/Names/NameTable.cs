@@ -75,7 +75,10 @@ internal sealed class NameTable(DiagnosticList diagnostics)
         string? outer = ComponentOf(name) ?? _components.Keys.FirstOrDefault(c => c.StartsWith(name + ".", StringComparison.Ordinal));
         if (outer is not null)
         {
-            diagnostics.Error(position, $"'{name}' and '{outer}' cannot be told apart: one begins with the other", "choose another name");
+            diagnostics.Error(
+                position,
+                $"'{name}' and '{outer}' cannot be told apart: one begins with the other",
+                "choose another name");
         }
 
         _components.TryAdd(name, position);
@@ -94,7 +97,9 @@ internal sealed class NameTable(DiagnosticList diagnostics)
 
         foreach (string name in perStep)
         {
-            _componentSteps.TryAdd(name, new KnownQuantity(name, QuantityOrigin.Component, position) { IsStepped = true, HasSteps = true });
+            _componentSteps.TryAdd(
+                name,
+                new KnownQuantity(name, QuantityOrigin.Component, position) { IsStepped = true, HasSteps = true });
         }
     }
 
@@ -145,7 +150,10 @@ internal sealed class NameTable(DiagnosticList diagnostics)
             }
             else if (horizon == 0)
             {
-                diagnostics.Error(quantity.Position, $"'{quantity.Name}[t]' needs steps, but the model has none", "add 'horizon: 30', the number of the last step");
+                diagnostics.Error(
+                    quantity.Position,
+                    $"'{quantity.Name}[t]' needs steps, but the model has none",
+                    "add 'horizon: 30', the number of the last step");
             }
         }
     }

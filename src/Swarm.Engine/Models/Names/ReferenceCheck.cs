@@ -47,7 +47,10 @@ internal sealed class ReferenceCheck(NameTable names, int? horizon, DiagnosticLi
         string word = reduction.Reduction.ToString().ToLowerInvariant();
         if (ExpressionWalk.All(reduction.Operand).OfType<OverStepsExpression>().FirstOrDefault() is { } inner)
         {
-            diagnostics.Error(inner.Position, $"a value over all steps stands inside '{word}'", "give the inner one a formula of its own");
+            diagnostics.Error(
+                inner.Position,
+                $"a value over all steps stands inside '{word}'",
+                "give the inner one a formula of its own");
             return;
         }
 
@@ -77,7 +80,10 @@ internal sealed class ReferenceCheck(NameTable names, int? horizon, DiagnosticLi
         }
         else if (reference.Index != StepIndex.None && !known.IsStepped)
         {
-            diagnostics.Error(reference.Position, $"'{reference.Name}' exists once per trial and has no steps", $"write {reference.Name}");
+            diagnostics.Error(
+                reference.Position,
+                $"'{reference.Name}' exists once per trial and has no steps",
+                $"write {reference.Name}");
         }
         else
         {
@@ -89,7 +95,10 @@ internal sealed class ReferenceCheck(NameTable names, int? horizon, DiagnosticLi
     {
         if (!names.MayExist(reference.Name))
         {
-            diagnostics.Error(reference.Position, $"{DiagnosticList.Quote(reference.Name)} is not known", Suggestion(reference.Name, names));
+            diagnostics.Error(
+                reference.Position,
+                $"{DiagnosticList.Quote(reference.Name)} is not known",
+                Suggestion(reference.Name, names));
         }
     }
 
@@ -123,7 +132,10 @@ internal sealed class ReferenceCheck(NameTable names, int? horizon, DiagnosticLi
                 ReportStart(reference, known, $"'{name}' has no value at step 0");
                 break;
             case StepIndex.Fixed when reference.Step > horizon && horizon > 0:
-                diagnostics.Error(reference.Position, $"step {reference.Step} lies beyond the horizon, {horizon}", $"write {name}[horizon] for the last step");
+                diagnostics.Error(
+                    reference.Position,
+                    $"step {reference.Step} lies beyond the horizon, {horizon}",
+                    $"write {name}[horizon] for the last step");
                 break;
         }
     }

@@ -35,7 +35,10 @@ internal static class UseCheck
 
         foreach (TriangleInput triangle in model.Triangles.Where(triangle => !needed.Contains(triangle.Name)))
         {
-            diagnostics.Warning(triangle.Position, $"triangle '{triangle.Name}' reaches no outcome", $"report {triangle.Name}.unpaid, or remove it");
+            diagnostics.Warning(
+                triangle.Position,
+                $"triangle '{triangle.Name}' reaches no outcome",
+                $"report {triangle.Name}.unpaid, or remove it");
         }
     }
 }

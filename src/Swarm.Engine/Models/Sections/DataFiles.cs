@@ -27,11 +27,16 @@ internal sealed class DataFiles(Func<string, DataFile?> find)
 
         if (file is null)
         {
-            diagnostics.Error(name.Position, $"there is no data file {DiagnosticList.Quote(name.Text)}", "its name is taken as seen from the model");
+            diagnostics.Error(
+                name.Position,
+                $"there is no data file {DiagnosticList.Quote(name.Text)}",
+                "its name is taken as seen from the model");
         }
         else if (file.Content.Length > ModelBounds.DataFileBytes)
         {
-            diagnostics.Error(name.Position, $"data file {DiagnosticList.Quote(name.Text)} has more than {ModelBounds.DataFileBytes >> 20} MiB");
+            diagnostics.Error(
+                name.Position,
+                $"data file {DiagnosticList.Quote(name.Text)} has more than {ModelBounds.DataFileBytes >> 20} MiB");
             return null;
         }
 

@@ -49,9 +49,12 @@ internal static class DistributionBinder
         diagnostics.Error(
             unnamed.Position,
             "parameters of a distribution are given by name",
-            $"write {likely.Name}({string.Join(", ", likely.Parameters.Select(p => p.Name + (p.Kind == ParameterKind.Numbers ? "=[...]" : "=...")))})");
+            $"write {likely.Name}({string.Join(", ", likely.Parameters.Select(Named))})");
         return false;
     }
+
+    private static string Named(ParameterForm parameter) =>
+        parameter.Name + (parameter.Kind == ParameterKind.Numbers ? "=[...]" : "=...");
 
     /// <summary>The form that most of the given names belong to, and of those the one that misses the fewest.</summary>
     private static DistributionForm Nearest(DistributionForm[] forms, DistributionCall call)
@@ -134,7 +137,9 @@ internal static class DistributionBinder
             {
                 diagnostics.Error(
                     argument.Values[i].Position,
-                    value is null ? $"'{parameter.Name}' refers to a quantity, but parameters are constant" : $"'{parameter.Name}' is not a finite number",
+                    value is null
+                        ? $"'{parameter.Name}' refers to a quantity, but parameters are constant"
+                        : $"'{parameter.Name}' is not a finite number",
                     value is null ? "draw a standardised value, and scale and shift it in a formula" : null);
                 return null;
             }

@@ -10,11 +10,13 @@ namespace Swarm.Engine.Models.Sections;
 internal static class DrawsSection
 {
     private static readonly DistributionShape Distribution = new(
-        "A distribution with its parameters by name, as in normal(mean=2%, sd=1.2%). Parameters are constant: numbers or arithmetic on numbers. Known are "
+        "A distribution with its parameters by name, as in normal(mean=2%, sd=1.2%). Parameters are constant: numbers or "
+        + "arithmetic on numbers. Known are "
         + string.Join("; ", DistributionCatalogue.Forms.Select(form => $"{form.Signature} ({form.Help.TrimEnd('.')})")) + ".");
 
     public static MapShape Shape { get; } = new(
-        "Random inputs. A draw x exists once per trial, x[t] once per step. Its name keys its random numbers, so that they stay the same when the rest of the model changes.",
+        "Random inputs. A draw x exists once per trial, x[t] once per step. Its name keys its random numbers, so that they stay the "
+        + "same when the rest of the model changes.",
         NameForm.Draw,
         new ShortOrLongShape(
             Distribution.Help,
@@ -27,7 +29,8 @@ internal static class DrawsSection
                 ])));
 
     /// <summary>The option that lets a renamed draw or component keep its random numbers.</summary>
-    public static TextShape StreamShape => new("The name that keys the random numbers, so that a renamed draw or component keeps those of its old name.");
+    public static TextShape StreamShape => new(
+        "The name that keys the random numbers, so that a renamed draw or component keeps those of its old name.");
 
     public static IReadOnlyList<Draw> Read(MappingNode root, ReadingContext context)
     {

@@ -33,7 +33,9 @@ internal static class FormulaSetCheck
         long steps = context.Names.All.Count(quantity => quantity.IsStepped) * (horizon + 1L);
         if (steps > ModelBounds.QuantitySteps)
         {
-            ReportSize(context, $"quantities with [t] times steps are {steps:N0}, and {ModelBounds.QuantitySteps:N0} are allowed");
+            ReportSize(
+                context,
+                $"quantities with [t] times steps are {steps:N0}, and {ModelBounds.QuantitySteps:N0} are allowed");
             return false;
         }
 
@@ -46,7 +48,9 @@ internal static class FormulaSetCheck
         long cost = graph.Units.Sum(unit => unit.Cost(horizon));
         if (cost > ModelBounds.ReferenceSteps)
         {
-            ReportSize(context, $"references of formulas times steps are {cost:N0}, and {ModelBounds.ReferenceSteps:N0} are allowed");
+            ReportSize(
+                context,
+                $"references of formulas times steps are {cost:N0}, and {ModelBounds.ReferenceSteps:N0} are allowed");
             return;
         }
 

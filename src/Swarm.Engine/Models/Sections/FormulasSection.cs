@@ -9,10 +9,12 @@ namespace Swarm.Engine.Models.Sections;
 internal static class FormulasSection
 {
     public static MapShape Shape { get; } = new(
-        "Quantities computed from draws, components and each other, in any order. x exists once per trial, x[t] at each step 1..horizon, x[0] gives x[t] a value before the first step.",
+        "Quantities computed from draws, components and each other, in any order. "
+        + "x exists once per trial, x[t] at each step 1..horizon, x[0] gives x[t] a value before the first step.",
         NameForm.Formula,
         new FormulaShape(
-            "Arithmetic with + - * / ^, comparisons, and, or, not, if(condition, a, b), min, max, abs, exp, log, sqrt, floor, clamp(x, low, high), and sum, mean, any, all, largest, smallest over [t]."));
+            "Arithmetic with + - * / ^, comparisons, and, or, not, if(condition, a, b), min, max, abs, "
+            + "exp, log, sqrt, floor, clamp(x, low, high), and sum, mean, any, all, largest, smallest over [t]."));
 
     /// <summary>Formulas that could be parsed; all of them are declared.</summary>
     public static IReadOnlyList<Formula> Read(MappingNode root, ReadingContext context)

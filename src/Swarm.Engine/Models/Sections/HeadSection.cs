@@ -12,7 +12,9 @@ internal static class HeadSection
         "Unit of money, shown with figures. The engine does not convert anything.",
         [
             new Field("unit", new TextShape("Name of the unit, as in crown.")) { IsRequired = true },
-            new Field("scale", new NumberShape("How many units one number of the model stands for, as in 1000 (default 1).") { Above = 0 }),
+            new Field(
+                "scale",
+                new NumberShape("How many units one number of the model stands for, as in 1000 (default 1).") { Above = 0 }),
         ]);
 
     public static NumberShape HorizonShape { get; } =

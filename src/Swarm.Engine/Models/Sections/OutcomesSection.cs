@@ -27,16 +27,25 @@ internal sealed class OutcomesSection(ReadingContext context, TruthInference tru
                     new NumberShape("A threshold.")) { Most = 100 }),
                 new Field("adverse", new ChoiceShape(
                     "Which end hurts; tail figures look there.",
-                    [new("high", "Large values hurt, as of claims (the default)."), new("low", "Small values hurt, as of a fund.")])),
+                    [
+                        new("high", "Large values hurt, as of claims (the default)."),
+                        new("low", "Small values hurt, as of a fund."),
+                    ])),
                 new Field("fan", ChoiceShape.Truth("Asks for a picture over the steps; for x[t] only.")),
                 new Field("by", new ListShape(
                     "How a triangle's unpaid claims are broken down; by default both ways.",
                     new ChoiceShape(
                         "A breakdown.",
-                        [new("origin", "By origin period."), new("calendar", "By future calendar period, the payment pattern.")])) { Most = 2 }),
+                        [
+                            new("origin", "By origin period."),
+                            new("calendar", "By future calendar period, the payment pattern."),
+                        ])) { Most = 2 }),
                 new Field("unit", new ChoiceShape(
                     "Whether figures are shown with the unit of money.",
-                    [new("money", "An amount of money (the default, but for comparisons)."), new("none", "A rate, a count, a probability.")])),
+                    [
+                        new("money", "An amount of money (the default, but for comparisons)."),
+                        new("none", "A rate, a count, a probability."),
+                    ])),
             ]) { MayBeNothing = true })
         { Least = 1 };
 
@@ -119,7 +128,10 @@ internal sealed class OutcomesSection(ReadingContext context, TruthInference tru
         CheckCount(name, entry.Key);
         if (options.Truth("fan") == true && options?.Entry("fan") is { } fan && name.Kind != QuantityKind.PerStep)
         {
-            context.Diagnostics.Error(fan.Key.Position, $"'{name}' has one value, and no fan over steps", $"report {name.Name}[t], or remove 'fan'");
+            context.Diagnostics.Error(
+                fan.Key.Position,
+                $"'{name}' has one value, and no fan over steps",
+                $"report {name.Name}[t], or remove 'fan'");
         }
 
         bool isMoney = options.Text("unit") is { } unit ? unit == "money" : !truths.IsTruth(name.Name);
@@ -189,7 +201,10 @@ internal sealed class OutcomesSection(ReadingContext context, TruthInference tru
 
         if (!isUnpaid)
         {
-            context.Diagnostics.Error(by.Key.Position, $"'{name}' cannot be broken down", "'by' goes with the unpaid claims of a triangle, as in motor.unpaid");
+            context.Diagnostics.Error(
+                by.Key.Position,
+                $"'{name}' cannot be broken down",
+                "'by' goes with the unpaid claims of a triangle, as in motor.unpaid");
         }
 
         return

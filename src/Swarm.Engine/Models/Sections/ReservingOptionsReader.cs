@@ -88,7 +88,9 @@ internal sealed class ReservingOptionsReader(MappingNode options, Triangle trian
             Refuse(
                 cell.Position,
                 $"origin {label.Text} has no link ratio from development {development}",
-                triangle.Known(origin) > 1 ? $"its link ratios begin at developments 1 to {triangle.Known(origin) - 1}" : "it has no link ratio at all");
+                triangle.Known(origin) > 1
+                    ? $"its link ratios begin at developments 1 to {triangle.Known(origin) - 1}"
+                    : "it has no link ratio at all");
             return null;
         }
 
@@ -114,7 +116,10 @@ internal sealed class ReservingOptionsReader(MappingNode options, Triangle trian
 
         if (factor < 1)
         {
-            diagnostics.Warning(tail.Scalar("factor")!.Position, "a tail factor below 1 lets claims shrink beyond the triangle", "1.01 means 1% more");
+            diagnostics.Warning(
+                tail.Scalar("factor")!.Position,
+                "a tail factor below 1 lets claims shrink beyond the triangle",
+                "1.01 means 1% more");
         }
 
         return new TailOptions { Factor = factor, Sd = tail.Number("sd") ?? 0, Periods = tail.Whole("periods") ?? 1 };

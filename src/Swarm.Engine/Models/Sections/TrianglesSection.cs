@@ -105,26 +105,25 @@ internal sealed class TrianglesSection(
     }
 
     /// <summary>Fits the method once, so that a triangle that it cannot be used on is refused here and not by the run.</summary>
-    private void CheckFit(Triangle triangle, ReservingOptions options, SourcePosition position)
+    private ReservingFit? Fit(Triangle triangle, ReservingOptions options, SourcePosition position)
     {
         List<Finding> findings = [];
-        _ = ReservingFit.Of(triangle, options, findings);
+        ReservingFit? fit = ReservingFit.Of(triangle, options, findings);
         foreach (Finding finding in findings)
         {
             context.Diagnostics.Add(finding.At(position));
         }
+
+        return fit;
     }
 
     private TriangleInput Input(string name, SourcePosition position, Triangle triangle, MappingNode options)
     {
         ReservingOptionsReader reader = new(options, triangle, context.Diagnostics);
         ReservingOptions reserving = reader.Read();
-        if (_structureIsRight && reader.IsRight)
-        {
-            CheckFit(triangle, reserving, position);
-        }
-
-        TriangleNames names = new(name, triangle, new RunOffShape(triangle, reserving.Tail?.Periods ?? 0));
+        ReservingFit? fit = _structureIsRight && reader.IsRight ? Fit(triangle, reserving, position) : null;
+        int tailPeriods = fit?.ChainLadder.TailPeriods ?? reserving.Tail?.Periods ?? 0;
+        TriangleNames names = new(name, triangle, new RunOffShape(triangle, tailPeriods));
         context.Names.DeclareQuantities(name, names.All, perStep: context.Horizon == 0 ? [] : [names.PaidByStep]);
         return new TriangleInput
         {

@@ -23,7 +23,10 @@ internal sealed class NameForm
 
     /// <summary>A formula: none, <c>[t]</c>, or <c>[0]</c>.</summary>
     public static NameForm Formula { get; } =
-        new("t0", @"(\[(t|0)\])?", "a formula is written x, x[t] for a value at each step, or x[0] for the value before the first step");
+        new(
+            "t0",
+            @"(\[(t|0)\])?",
+            "a formula is written x, x[t] for a value at each step, or x[0] for the value before the first step");
 
     /// <summary>An outcome: none, <c>[t]</c>, a step, or <c>[horizon]</c>.</summary>
     public static NameForm Outcome { get; } =

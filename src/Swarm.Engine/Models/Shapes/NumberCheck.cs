@@ -11,7 +11,10 @@ internal static class NumberCheck
     {
         if (!NumberText.TryRead(scalar.Text, out double value))
         {
-            diagnostics.Error(scalar.Position, $"{place} is {DiagnosticList.Quote(scalar.Text)}, which is no number", HintFor(scalar.Text));
+            diagnostics.Error(
+                scalar.Position,
+                $"{place} is {DiagnosticList.Quote(scalar.Text)}, which is no number",
+                HintFor(scalar.Text));
         }
         else if (shape.IsWhole && value != Math.Floor(value))
         {
@@ -19,7 +22,10 @@ internal static class NumberCheck
         }
         else if (!IsInRange(value, shape))
         {
-            diagnostics.Error(scalar.Position, $"{place} is {scalar.Text}", $"it must be {Range(shape)}{PercentHint(value, shape)}");
+            diagnostics.Error(
+                scalar.Position,
+                $"{place} is {scalar.Text}",
+                $"it must be {Range(shape)}{PercentHint(value, shape)}");
         }
     }
 

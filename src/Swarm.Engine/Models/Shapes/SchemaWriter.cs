@@ -45,7 +45,9 @@ internal static class SchemaWriter
                 schema["pattern"] = "^[0-9]{4}-[0-9]{2}-[0-9]{2}$";
                 break;
             case NumberShape number:
-                schema["anyOf"] = new JsonArray(Number(number), new JsonObject { ["type"] = "string", ["pattern"] = NumberText.Pattern });
+                schema["anyOf"] = new JsonArray(
+                    Number(number),
+                    new JsonObject { ["type"] = "string", ["pattern"] = NumberText.Pattern });
                 break;
             case ChoiceShape choice:
                 AddChoices(schema, choice);

@@ -73,15 +73,23 @@ internal sealed class StructureCheck(DiagnosticList diagnostics)
 
         foreach (Field missing in shape.Fields.Where(f => f.IsRequired && mapping[f.Key] is null))
         {
-            diagnostics.Error(mapping.Position, $"'{missing.Key}' is missing in {place}", $"add '{missing.Key}: ...' ({missing.Shape.Help.Split([". ", ": ", "; "], 2, StringSplitOptions.None)[0].TrimEnd('.')})");
+            diagnostics.Error(
+                mapping.Position,
+                $"'{missing.Key}' is missing in {place}",
+                $"add '{missing.Key}: ...' ({FirstSentence(missing.Shape.Help)})");
         }
 
         int given = shape.OneOf.Count(key => mapping[key] is not null);
         if (shape.OneOf.Count > 0 && given != 1)
         {
-            diagnostics.Error(mapping.Position, $"{place} has {(given == 0 ? "none" : "more than one")} of {string.Join(" and ", shape.OneOf.Select(k => $"'{k}'"))}", "write one of them");
+            diagnostics.Error(
+                mapping.Position,
+                $"{place} has {(given == 0 ? "none" : "more than one")} of {string.Join(" and ", shape.OneOf.Select(k => $"'{k}'"))}",
+                "write one of them");
         }
     }
+
+    private static string FirstSentence(string help) => help.Split([". ", ": ", "; "], 2, StringSplitOptions.None)[0].TrimEnd('.');
 
     private void ReportUnknown(ScalarNode key, ObjectShape shape, string place)
     {
@@ -121,11 +129,17 @@ internal sealed class StructureCheck(DiagnosticList diagnostics)
         string name = key.Text[..length];
         if (length > 0 && NameForm.IsReserved(name))
         {
-            diagnostics.Error(key.Position, $"{DiagnosticList.Quote(name)} is a word of formulas and cannot be a name", "choose another name");
+            diagnostics.Error(
+                key.Position,
+                $"{DiagnosticList.Quote(name)} is a word of formulas and cannot be a name",
+                "choose another name");
         }
         else if (length > 0 && (length == key.Text.Length || key.Text[length] == '['))
         {
-            diagnostics.Error(key.PositionOf(length), $"{DiagnosticList.Quote(key.Text)} has an index that cannot stand here", form.Allowed);
+            diagnostics.Error(
+                key.PositionOf(length),
+                $"{DiagnosticList.Quote(key.Text)} has an index that cannot stand here",
+                form.Allowed);
         }
         else
         {
@@ -170,7 +184,10 @@ internal sealed class StructureCheck(DiagnosticList diagnostics)
                 ReportChoice(scalar, choice, place);
                 break;
             case DateShape when !DateOnly.TryParseExact(scalar.Text, "yyyy-MM-dd", CultureInfo.InvariantCulture, DateTimeStyles.None, out _):
-                diagnostics.Error(scalar.Position, $"{place} is {DiagnosticList.Quote(scalar.Text)}, which is no day", "write it as 2025-12-31");
+                diagnostics.Error(
+                    scalar.Position,
+                    $"{place} is {DiagnosticList.Quote(scalar.Text)}, which is no day",
+                    "write it as 2025-12-31");
                 break;
             case TextShape when scalar.Text.Length > ModelBounds.FreeTextLength:
                 diagnostics.Error(scalar.Position, $"{place} is longer than {ModelBounds.FreeTextLength} characters");
