@@ -55,6 +55,9 @@ public sealed class OdpFit
     /// </summary>
     public IReadOnlyList<double> Pool { get; }
 
+    /// <summary>Mean of the <see cref="Pool"/>; pseudo increments lie above their means by this times their spread, on average.</summary>
+    public double PoolMean => MeanOf(Pool);
+
     /// <summary>True where the chain ladder gives the model's maximum quasi-likelihood.</summary>
     public bool IsMaximumLikelihood =>
         Options.Average == LinkRatioAverage.VolumeWeighted && ChainLadder.Ratios.AllCount && Options.Scale == ScaleForm.Constant;
@@ -93,7 +96,9 @@ public sealed class OdpFit
         int parameters = ParametersOf(residuals);
         if (count > parameters)
         {
-            return new OdpFit(chainLadder, means, residuals);
+            var fit = new OdpFit(chainLadder, means, residuals);
+            OdpRules.WarnOfDrift(fit, findings);
+            return fit;
         }
 
         findings.Add(Finding.Error(
@@ -173,13 +178,18 @@ public sealed class OdpFit
 
     private static double[] Centred(double[] pool)
     {
+        double mean = MeanOf(pool);
+        return [.. pool.Select(residual => residual - mean)];
+    }
+
+    private static double MeanOf(IReadOnlyList<double> pool)
+    {
         double sum = 0;
         foreach (double residual in pool)
         {
             sum += residual;
         }
 
-        double mean = sum / pool.Length;
-        return [.. pool.Select(residual => residual - mean)];
+        return sum / pool.Count;
     }
 }

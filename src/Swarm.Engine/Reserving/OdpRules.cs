@@ -24,6 +24,21 @@ internal static class OdpRules
         return errors.Length == 0;
     }
 
+    /// <summary>
+    /// Residuals of all cells sum to about 0, those that are left after exclusions need not: every pseudo increment is then shifted the
+    /// same way, and with them the mean of the bootstrap.
+    /// </summary>
+    public static void WarnOfDrift(OdpFit fit, ICollection<Finding> findings)
+    {
+        if (!fit.ChainLadder.Ratios.AllCount && !fit.Options.CentreResiduals)
+        {
+            findings.Add(Finding.Warning(
+                $"with link ratios left out, the residuals that are resampled have a mean of {fit.PoolMean:G3}, not 0, which moves the "
+                + "bootstrap's mean away from the chain ladder",
+                "write centre: true"));
+        }
+    }
+
     private static IEnumerable<Finding> BadDevelopments(ChainLadder chainLadder)
     {
         Triangle triangle = chainLadder.Triangle;

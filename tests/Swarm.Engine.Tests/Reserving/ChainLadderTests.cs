@@ -90,9 +90,11 @@ public sealed class ChainLadderTests
             ChainLadder after = Triangles.ChainLadder(scaled);
 
             AssertClose(scale * before.TotalReserve, after.TotalReserve, 1e-9);
+            // Where origins grow alike, errors are nothing but rounding.
+            double rounding = 1e-7 * after.TotalReserve;
             AssertClose(
-                scale * Triangles.Mack(triangle).Total.StandardError, Triangles.Mack(scaled).Total.StandardError, 1e-7);
-            AssertClose(scale * Triangles.Odp(triangle).Scale(0), Triangles.Odp(scaled).Scale(0), 1e-7);
+                scale * Triangles.Mack(triangle).Total.StandardError, Triangles.Mack(scaled).Total.StandardError, 1e-7, rounding);
+            AssertClose(scale * Triangles.Odp(triangle).Scale(0), Triangles.Odp(scaled).Scale(0), 1e-7, rounding);
         });
 
     [Fact]

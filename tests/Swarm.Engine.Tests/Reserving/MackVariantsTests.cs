@@ -1,5 +1,3 @@
-using Swarm.Engine.Models;
-using Swarm.Engine.Plans;
 using Swarm.Engine.Reserving;
 using Swarm.Engine.Summaries;
 
@@ -8,8 +6,6 @@ namespace Swarm.Engine.Tests.Reserving;
 /// <summary>The simulation of Mack's model where its options leave the plain case, against the closed forms of Mack (1999).</summary>
 public sealed class MackVariantsTests
 {
-    private const long Trials = 40_000;
-
     [Theory]
     [InlineData(ProcessError.Gamma, LinkRatioAverage.Simple)]
     [InlineData(ProcessError.Lognormal, LinkRatioAverage.Simple)]
@@ -26,7 +22,7 @@ public sealed class MackVariantsTests
         Triangle triangle = Triangles.Load("mw2008");
         Mack mack = Triangles.Mack(triangle, options);
 
-        OutcomeFigures total = Run(triangle, options);
+        OutcomeFigures total = TriangleRun.Unpaid(triangle, options);
 
         Assert.InRange((total.Mean.Value - mack.ChainLadder.TotalReserve) / total.Mean.StandardError!.Value, -4, 4);
         // Four standard errors of the standard deviation, and a thousandth for the products that the closed form drops.
@@ -43,22 +39,9 @@ public sealed class MackVariantsTests
 
         var options = new ReservingOptions { Method = ReservingMethod.Mack, Process = process };
 
-        OutcomeFigures total = Run(triangle, options);
+        OutcomeFigures total = TriangleRun.Unpaid(triangle, options);
 
         double reserve = Triangles.ChainLadder(triangle, options).TotalReserve;
         Assert.InRange((total.Mean.Value - reserve) / total.Mean.StandardError!.Value, -4, 4);
-    }
-
-    private static OutcomeFigures Run(Triangle triangle, ReservingOptions options)
-    {
-        var model = new Model
-        {
-            Title = "variant",
-            Triangles = [new TriangleInput { Name = "t", Stream = "t", Triangle = triangle, Options = options }],
-            Outcomes = [new Outcome { Name = "t.unpaid", Kind = QuantityKind.PerTrial }],
-        };
-        RunOutcome run = LocalRun.Execute(
-            model, new RunSettings { Seed = 7, Trials = Trials, Threads = 2 }, null, CancellationToken.None);
-        return Figures.Of(run.Results.Single(result => result.Result.Request.Name == "t.unpaid").Result, ErrorMethod.ClosedForm);
     }
 }

@@ -114,6 +114,21 @@ public sealed class ReservingRefusalTests
     }
 
     [Fact]
+    public void Residuals_that_do_not_sum_to_zero_for_want_of_the_excluded_ones_are_warned_of()
+    {
+        Triangle triangle = Triangles.Load("mw2008");
+        ReservingOptions excluding = s_bootstrap with { Excluded = [(4, 2)] };
+        List<Finding> findings = [];
+        List<Finding> centred = [];
+
+        ReservingFit.Of(triangle, excluding, findings);
+        ReservingFit.Of(triangle, excluding with { CentreResiduals = true }, centred);
+
+        Assert.Equal("write centre: true", Assert.Single(findings).Hint);
+        Assert.Empty(centred);
+    }
+
+    [Fact]
     public void No_tail_is_added_where_part_of_it_is_past_and_unknown()
     {
         Triangle narrow = Triangles.OfCumulative([10, 15], [11, 17], [10, 14], [12]);
