@@ -7,7 +7,7 @@ namespace Swarm.Engine.Summaries;
 internal static class Dominance
 {
     /// <summary>Fewer trials than this dominate.</summary>
-    public const int Handful = 5;
+    public const int Handful = 3;
 
     /// <summary>
     /// The least number of trials that carry over half of the sum of |x - center|^order over a range of clusters, if that is

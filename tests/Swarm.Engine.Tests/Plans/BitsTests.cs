@@ -89,7 +89,7 @@ public sealed class BitsTests
     public void The_golden_digest_of_edition_1_stands()
     {
         Assert.Equal(1, Edition.Number);
-        Assert.Equal(TestFile.Lines("golden-digest-1.txt").First(), Expected);
+        Assert.True(TestFile.Lines("golden-digest-1.txt").First() == Expected, $"the digest of this build is {Expected}");
     }
 
     private static PreparedRun Prepare(LaneWidth width) =>
