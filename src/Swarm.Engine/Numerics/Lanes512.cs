@@ -91,7 +91,7 @@ internal readonly unsafe struct Lanes512 : ILanes<Lanes512>
     public static ulong SignBits(Lanes512 mask) => Vector512.ExtractMostSignificantBits(mask._v);
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static Lanes512 Xor(Lanes512 a, Lanes512 b, Lanes512 c) => new(Avx512F.IsSupported ? Avx512F.TernaryLogic(a._v.AsUInt64(), b._v.AsUInt64(), c._v.AsUInt64(), 0x96).AsDouble() : 
+    public static Lanes512 Xor(Lanes512 a, Lanes512 b, Lanes512 c) => new(Avx512F.IsSupported ? Avx512F.TernaryLogic(a._v.AsUInt64(), b._v.AsUInt64(), c._v.AsUInt64(), 0x96).AsDouble() :
         (a._v.AsUInt64() ^ b._v.AsUInt64() ^ c._v.AsUInt64()).AsDouble());
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]

@@ -13,7 +13,8 @@ public static class RunNotes
         IEnumerable<Note> methods = model.Triangles.Select(triangle => new Note("method", MethodOf(triangle)));
         IEnumerable<Note> bookings = model.Triangles.Where(triangle => triangle.Options.Booked is not null).Select(Booking);
         IEnumerable<Note> tests = model.Triangles.Select(CalendarTest).OfType<Note>();
-        return [.. methods, .. bookings, .. tests, .. outcome.Redraws.Where(redraw => redraw.Trials > 0).Select(Redrawn)];
+        IEnumerable<Note> effects = model.Triangles.Select(ChoiceEffects.Of).OfType<string>().Select(text => new Note("effect", text));
+        return [.. methods, .. effects, .. bookings, .. tests, .. outcome.Redraws.Where(redraw => redraw.Trials > 0).Select(Redrawn)];
     }
 
     private static string MethodOf(TriangleInput input)

@@ -16,7 +16,9 @@ internal static class Triangles
         string file = $"reserving-{name}.csv";
         var request = new TriangleRequest
         {
-            FileName = file, Content = File.ReadAllBytes(TestFile.Path(file)), Layout = TriangleLayout.Square,
+            FileName = file,
+            Content = File.ReadAllBytes(TestFile.Path(file)),
+            Layout = TriangleLayout.Square,
         };
         (Triangle? triangle, IReadOnlyList<Diagnostic> diagnostics) = TriangleReader.Read(request);
         Assert.Empty(diagnostics);

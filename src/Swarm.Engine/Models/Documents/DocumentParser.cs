@@ -212,7 +212,8 @@ internal sealed class DocumentParser
         Advance();
         return _stopped ? null : new MappingNode(
             _source.PositionAt((int)start.Start.Index),
-            ordered) { LostEntries = lostEntries };
+            ordered)
+        { LostEntries = lostEntries };
     }
 
     private MappingEntry? Entry(int depth, bool inFlow)

@@ -46,8 +46,9 @@ internal sealed class OutcomesSection(ReadingContext context, TruthInference tru
                         new("money", "An amount of money (the default, but for comparisons)."),
                         new("none", "A rate, a count, a probability."),
                     ])),
-            ]) { MayBeNothing = true })
-        { Least = 1 };
+            ])
+        { MayBeNothing = true })
+    { Least = 1 };
 
     public IReadOnlyList<Outcome> Read(MappingNode root)
     {

@@ -129,5 +129,5 @@ internal static class TriangleShape
                 "periods",
                 Count("Development periods in which the tail is paid (default 1).", MaxTailPeriods)),
         ])
-        { OneOf = ["factor", "fit"] };
+    { OneOf = ["factor", "fit"] };
 }
