@@ -45,7 +45,7 @@ public sealed class RecordOfRunTests(SampleRecord sample) : IClassFixture<Sample
     [Fact]
     public void The_notes_state_the_method_and_the_calendar_year_test()
     {
-        Assert.Equal(["method", "calendar-year-effect"], sample.Record.Notes.Select(note => note.Code));
+        Assert.Equal(["method", "effect", "calendar-year-effect"], sample.Record.Notes.Select(note => note.Code));
         Assert.Contains("residuals not centred", sample.Record.Notes[0].Text, StringComparison.Ordinal);
     }
 
