@@ -1,134 +1,176 @@
 namespace Swarm.Engine.Summaries;
 
 /// <summary>
-/// Cuts a sorted stream of clusters into the clusters of a digest, in one pass from the least to the greatest. Holds scratch
-/// memory: one a thread.
+/// Makes digests: takes sorted clusters, from two digests or from the values of a leaf, and joins neighbours, in one pass from
+/// the least to the greatest, as the grid says. Holds scratch memory: one a thread.
 /// </summary>
 internal sealed class DigestBuilder
 {
-    // A value that repeats more often than this share of a cluster's limit stays an atom, so lattices of values stay exact.
-    private const double AtomShare = 0.125;
+    // A repeated value stays an atom if it fills this share of its cell, so lattices of values stay exact.
+    private const int CellsPerAtom = 8;
+    private readonly ClusterGrids _grids = new();
     private double[] _means = new double[4096];
     private long[] _marks = new long[4096];
-    private int _closed;
-    private ScaleFunction _scale;
+    private int _taken;
     private long _total;
-    private long _before;
-    private long _weight;
-    private double _first;
-    private double _last;
-    private double _excess;
-    private bool _atom;
-    private double _limit;
-    private double _atomLimit;
+    private int _made;
 
-    /// <summary>Starts a digest of so many trials.</summary>
-    public void Begin(long total)
+    /// <summary>Starts a digest of at most so many clusters before they are joined.</summary>
+    public void Begin(int clusters)
     {
-        _scale = new ScaleFunction(total);
-        _total = total;
-        _closed = 0;
-        _before = 0;
-        _weight = 0;
+        _taken = 0;
+        _total = 0;
+        if (_means.Length >= clusters) return;
+        _means = new double[2 * clusters];
+        _marks = new long[2 * clusters];
     }
 
     /// <summary>Takes the next cluster; means must not descend.</summary>
     public void Add(double mean, long weight, bool atom)
     {
-        if (_weight > 0)
-        {
-            if (atom && _atom && mean == _last)
-            {
-                _weight += weight;
-                return;
-            }
-
-            if (MayJoin(weight, atom))
-            {
-                _excess += weight * (mean - _first);
-                _weight += weight;
-                _last = mean;
-                _atom = false;
-                return;
-            }
-
-            Close();
-        }
-
-        Open(mean, weight, atom);
+        _means[_taken] = mean;
+        _marks[_taken] = TDigest.Mark(weight, atom);
+        _taken++;
+        _total += weight;
     }
 
-    /// <summary>Merges two digests in the total order (mean, atoms first, weight).</summary>
-    public void Merge(TDigest left, TDigest right)
+    /// <summary>As <see cref="Add"/>, for exact values after a mean that rounding may have lifted above them.</summary>
+    public void AddExact(double value, long weight)
     {
-        Begin(left.TotalWeight + right.TotalWeight);
-        ReadOnlySpan<double> a = left.Means, b = right.Means;
-        ReadOnlySpan<long> aMarks = left.Marks, bMarks = right.Marks;
-        int i = 0, j = 0;
-        while (i < a.Length && j < b.Length)
-        {
-            if (a[i] < b[j] || (a[i] == b[j] && Precedes(aMarks[i], bMarks[j])))
-            {
-                Add(a[i], aMarks[i] >> 1, (aMarks[i] & 1) == 0);
-                i++;
-            }
-            else
-            {
-                Add(b[j], bMarks[j] >> 1, (bMarks[j] & 1) == 0);
-                j++;
-            }
-        }
-
-        for (; i < a.Length; i++) Add(a[i], aMarks[i] >> 1, (aMarks[i] & 1) == 0);
-        for (; j < b.Length; j++) Add(b[j], bMarks[j] >> 1, (bMarks[j] & 1) == 0);
+        for (var k = _taken - 1; k >= 0 && _means[k] > value; k--) _means[k] = value;
+        Add(value, weight, true);
     }
 
-    /// <summary>Ends the digest and writes it; returns how many clusters it has.</summary>
-    public int Finish()
+    /// <summary>As <see cref="Add"/>, for a mean that rounding may have let fall below its predecessor.</summary>
+    public void AddRounded(double mean, long weight)
     {
-        if (_weight > 0) Close();
-        if (_before != _total) throw new InvalidOperationException($"The digest holds {_before} trials, not {_total}.");
-        return _closed;
+        var floor = _taken == 0 ? mean : _means[_taken - 1];
+        Add(mean < floor ? floor : mean, weight, atom: false);
+    }
+
+    /// <summary>Makes the digest of two others together. Which is left makes no difference.</summary>
+    public int Merge(TDigest left, TDigest right)
+    {
+        Begin(left.Count + right.Count);
+        Interleave(left, right);
+        _taken = left.Count + right.Count;
+        _total = left.TotalWeight + right.TotalWeight;
+        return Join();
+    }
+
+    /// <summary>Joins neighbours of what was taken; returns how many clusters are left.</summary>
+    public int Join()
+    {
+        _made = _taken == 0 ? 0 : Join(_grids.For(_total).DoubledBounds);
+        return _made;
     }
 
     /// <summary>Copies the finished digest.</summary>
-    public void CopyTo(TDigest target) => target.Assign(_means.AsSpan(0, _closed), _marks.AsSpan(0, _closed), _total);
+    public void CopyTo(TDigest target) => target.Assign(_means.AsSpan(0, _made), _marks.AsSpan(0, _made), _total);
 
-    private static bool Precedes(long mark, long other) => (mark & 1) != (other & 1) ? (mark & 1) == 0 : mark <= other;
-
-    private bool MayJoin(long weight, bool atom) =>
-        _weight + weight <= _limit
-        && !(_atom && _weight > _atomLimit)
-        && !(atom && weight > _atomLimit)
-        && _before + _weight + weight < _total;
-
-    private void Open(double mean, long weight, bool atom)
+    /// <summary>Sorts two digests into one list in the total order (mean, atoms first, weight).</summary>
+    private void Interleave(TDigest left, TDigest right)
     {
-        _weight = weight;
-        _first = mean;
-        _last = mean;
-        _excess = 0;
-        _atom = atom;
-        var atStart = _scale.LimitAt(_before);
-        var atEnd = _scale.LimitAt(_before + atStart);
-        _limit = atStart < atEnd ? atStart : atEnd;
-        _atomLimit = _limit * AtomShare > 1 ? _limit * AtomShare : 1;
+        ReadOnlySpan<double> a = left.GuardedMeans, b = right.GuardedMeans;
+        ReadOnlySpan<long> aMarks = left.GuardedMarks, bMarks = right.GuardedMarks;
+        Span<double> means = _means;
+        Span<long> marks = _marks;
+        int i = 0, j = 0;
+        var count = left.Count + right.Count;
+        for (var k = 0; k < count; k++)
+        {
+            var x = a[i];
+            var y = b[j];
+            if (y < x || (x == y && Precedes(bMarks[j], aMarks[i])))
+            {
+                means[k] = y;
+                marks[k] = bMarks[j++];
+            }
+            else
+            {
+                means[k] = x;
+                marks[k] = aMarks[i++];
+            }
+        }
     }
 
-    private void Close()
+    private static bool Precedes(long mark, long other) => (mark & 1) != (other & 1) ? (mark & 1) == 0 : mark < other;
+
+    /// <summary>In place: the list of made clusters never overtakes that of taken ones.</summary>
+    private int Join(ReadOnlySpan<long> bounds)
     {
-        if (_closed == _means.Length)
+        var means = _means.AsSpan(0, _taken);
+        var marks = _marks.AsSpan(0, _taken);
+        var made = 0;
+        var cell = 0;
+        var bound = bounds[0];
+        var atomWeight = AtomWeight(bounds, 0);
+        var doubledRank = 0L;
+        double first = means[0], last = first, excess = 0;
+        long weight = 0;
+        var atom = true;
+        for (var k = 0; k < means.Length; k++)
         {
-            Array.Resize(ref _means, 2 * _closed);
-            Array.Resize(ref _marks, 2 * _closed);
+            var mean = means[k];
+            var mark = marks[k];
+            var itsWeight = mark >> 1;
+            var itsAtom = (mark & 1) == 0;
+            var middle = doubledRank + itsWeight;
+            doubledRank += mark & ~1L;
+            var sameAtom = atom && itsAtom && mean == last;
+            if (sameAtom)
+            {
+                weight += itsWeight;
+                continue;
+            }
+
+            if (middle < bound && k < means.Length - 1 && weight > 0 && !(itsAtom && itsWeight > atomWeight) && !(atom && weight > atomWeight))
+            {
+                excess += itsWeight * (mean - first);
+                weight += itsWeight;
+                last = mean;
+                atom = false;
+                continue;
+            }
+
+            if (weight > 0)
+            {
+                Close(means, marks, made++, first, last, excess, weight, atom);
+            }
+
+            if (middle >= bound)
+            {
+                do
+                {
+                    bound = bounds[++cell];
+                }
+                while (middle >= bound);
+                atomWeight = AtomWeight(bounds, cell);
+            }
+
+            first = mean;
+            last = mean;
+            excess = 0;
+            weight = itsWeight;
+            atom = itsAtom;
         }
 
+        Close(means, marks, made++, first, last, excess, weight, atom);
+        return made;
+    }
+
+    private static void Close(
+        Span<double> means, Span<long> marks, int made, double first, double last, double excess, long weight, bool atom)
+    {
         // The clamp holds the order against rounding (and against overflow at the end of the range).
-        var mean = _first + (_excess / _weight);
-        _means[_closed] = _atom ? _first : mean < _last ? mean : _last;
-        _marks[_closed] = TDigest.Mark(_weight, _atom);
-        _closed++;
-        _before += _weight;
-        _weight = 0;
+        var mean = first + (excess / weight);
+        means[made] = mean < last ? mean : last;
+        marks[made] = TDigest.Mark(weight, atom);
+    }
+
+    private static long AtomWeight(ReadOnlySpan<long> bounds, int cell)
+    {
+        if (cell == 0 || cell == bounds.Length - 1) return 1;
+        return Math.Max(1, (bounds[cell] - bounds[cell - 1]) / (2 * CellsPerAtom));
     }
 }

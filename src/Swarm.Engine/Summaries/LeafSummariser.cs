@@ -9,7 +9,7 @@ public sealed class LeafSummariser
     private readonly LaneWidth _width;
     private readonly bool _blocks;
     private readonly DigestBuilder _builder = new();
-    private readonly LeafSketch _sketch = new();
+    private readonly LeafSketch _sketch;
     private readonly BlockFigures _blockFigures;
 
     /// <summary>A summariser at the machine's own vector width.</summary>
@@ -25,6 +25,7 @@ public sealed class LeafSummariser
         _pool = pool;
         _width = width;
         _blocks = shape.BatchesAreBlocks;
+        _sketch = new LeafSketch(width);
         _blockFigures = new BlockFigures(width);
     }
 
@@ -39,8 +40,8 @@ public sealed class LeafSummariser
         var moments = MomentKernel.Of(values, _width);
         if (!double.IsFinite(moments.Min) || !double.IsFinite(moments.Max) || double.IsNaN(moments.Mean))
             throw new ArgumentException($"A value of outcome '{request.Name}' is not finite.");
-        _sketch.Sketch(values, _builder);
-        var summary = _pool.Rent(_builder.Finish());
+        _sketch.Sketch(values, moments.Min, moments.Max, _builder);
+        var summary = _pool.Rent(_builder.Join());
         _builder.CopyTo(summary.Digest);
         summary.Moments = moments;
         var exceedances = summary.ExceedancesFor(request.Thresholds.Count);

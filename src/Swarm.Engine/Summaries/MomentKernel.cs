@@ -27,6 +27,30 @@ internal static unsafe class MomentKernel
         _ => CountAbove<Lanes64>(values, threshold),
     };
 
+    /// <summary>How many values equal one; -0 equals 0.</summary>
+    public static long CountEqual(ReadOnlySpan<double> values, double value, LaneWidth width) => width switch
+    {
+        LaneWidth.Vector512 => CountEqual<Lanes512>(values, value),
+        LaneWidth.Vector256 => CountEqual<Lanes256>(values, value),
+        LaneWidth.Vector128 => CountEqual<Lanes128>(values, value),
+        _ => CountEqual<Lanes64>(values, value),
+    };
+
+    /// <summary>The least and the greatest of at least one value.</summary>
+    public static (double Min, double Max) ExtremesOf(ReadOnlySpan<double> values, LaneWidth width)
+    {
+        fixed (double* first = values)
+        {
+            return width switch
+            {
+                LaneWidth.Vector512 => Extremes<Lanes512>(first, values.Length),
+                LaneWidth.Vector256 => Extremes<Lanes256>(first, values.Length),
+                LaneWidth.Vector128 => Extremes<Lanes128>(first, values.Length),
+                _ => Extremes<Lanes64>(first, values.Length),
+            };
+        }
+    }
+
     private static Moments Of<T>(ReadOnlySpan<double> values)
         where T : unmanaged, ILanes<T>
     {
@@ -171,13 +195,36 @@ internal static unsafe class MomentKernel
             // A comparison mask is the integer -1, so subtracting it counts.
             for (; i <= values.Length - T.Count; i += T.Count)
                 counts = T.SubtractIntegers(counts, T.LessThan(limit, T.Load(first + i)));
-            var lanes = stackalloc double[Virtual];
-            T.Store(counts, lanes);
-            var above = 0L;
-            for (var lane = 0; lane < T.Count; lane++) above += BitConverter.DoubleToInt64Bits(lanes[lane]);
+            var above = SumOfIntegers(counts);
             for (; i < values.Length; i++) above += first[i] > threshold ? 1 : 0;
             return above;
         }
+    }
+
+    private static long CountEqual<T>(ReadOnlySpan<double> values, double value)
+        where T : unmanaged, ILanes<T>
+    {
+        fixed (double* first = values)
+        {
+            var same = T.Create(value);
+            var counts = T.CreateBits(0);
+            var i = 0;
+            for (; i <= values.Length - T.Count; i += T.Count)
+                counts = T.SubtractIntegers(counts, T.EqualTo(same, T.Load(first + i)));
+            var equal = SumOfIntegers(counts);
+            for (; i < values.Length; i++) equal += first[i] == value ? 1 : 0;
+            return equal;
+        }
+    }
+
+    private static long SumOfIntegers<T>(T counts)
+        where T : unmanaged, ILanes<T>
+    {
+        var lanes = stackalloc double[Virtual];
+        T.Store(counts, lanes);
+        var sum = 0L;
+        for (var lane = 0; lane < T.Count; lane++) sum += BitConverter.DoubleToInt64Bits(lanes[lane]);
+        return sum;
     }
 
     private static double Tree(double* lanes) =>

@@ -14,8 +14,7 @@ internal sealed class NodeMerge(SummaryPool? pool)
     {
         if (left.Exceedances.Length != right.Exceedances.Length)
             throw new ArgumentException("Summaries that count different thresholds are not of the same outcome.");
-        _builder.Merge(left.Digest, right.Digest);
-        var clusters = _builder.Finish();
+        var clusters = _builder.Merge(left.Digest, right.Digest);
         var merged = pool?.Rent(clusters) ?? new OutcomeSummary(clusters);
         _builder.CopyTo(merged.Digest);
         merged.Moments = Moments.Merge(left.Moments, right.Moments);

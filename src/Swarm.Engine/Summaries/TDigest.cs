@@ -13,8 +13,9 @@ public sealed class TDigest
 
     internal TDigest(int capacity)
     {
-        _means = new double[capacity];
-        _marks = new long[capacity];
+        _means = new double[capacity + 1];
+        _marks = new long[capacity + 1];
+        _means[0] = double.PositiveInfinity;
     }
 
     /// <summary>Clusters.</summary>
@@ -35,7 +36,13 @@ public sealed class TDigest
     /// <summary>For each cluster twice its weight, plus one unless it is an atom.</summary>
     internal ReadOnlySpan<long> Marks => _marks.AsSpan(0, Count);
 
-    internal int Capacity => _means.Length;
+    /// <summary>The means and one more, infinite, that ends a merge.</summary>
+    internal ReadOnlySpan<double> GuardedMeans => _means.AsSpan(0, Count + 1);
+
+    /// <summary>The marks and one more.</summary>
+    internal ReadOnlySpan<long> GuardedMarks => _marks.AsSpan(0, Count + 1);
+
+    internal int Capacity => _means.Length - 1;
 
     /// <summary>Trials of a cluster.</summary>
     public long WeightAt(int index) => Marks[index] >> 1;
@@ -78,6 +85,7 @@ public sealed class TDigest
 
         if (total != totalWeight) throw new ArgumentException($"The digest's weights add up to {total}, not {totalWeight}.");
         digest.Count = means.Length;
+        digest._means[means.Length] = double.PositiveInfinity;
         digest.TotalWeight = total;
         return digest;
     }
@@ -86,14 +94,15 @@ public sealed class TDigest
 
     internal void Assign(ReadOnlySpan<double> means, ReadOnlySpan<long> marks, long totalWeight)
     {
-        if (means.Length > _means.Length)
+        if (means.Length > Capacity)
         {
-            _means = new double[means.Length];
-            _marks = new long[means.Length];
+            _means = new double[means.Length + 1];
+            _marks = new long[means.Length + 1];
         }
 
         means.CopyTo(_means);
         marks.CopyTo(_marks);
+        _means[means.Length] = double.PositiveInfinity;
         Count = means.Length;
         TotalWeight = totalWeight;
     }
