@@ -5,7 +5,9 @@ internal sealed class BinDensity
 {
     private const double BinsPerCluster = 1.6;
     private const int Steps = 256;
-    private readonly double[] _density = new double[Steps + 1];
+    private const int Mask = (2 * Steps) - 1;
+    private readonly double[] _density = new double[2 * Steps];
+    private readonly int[] _crowd = new int[2 * Steps];
     private long _leaf;
     private double _step;
 
@@ -15,11 +17,16 @@ internal sealed class BinDensity
         _leaf = leaf;
         _step = (double)Steps / leaf;
         var scale = new ScaleFunction(leaf);
-        for (var i = 0; i <= Steps; i++) _density[i] = BinsPerCluster / scale.LimitAt(i / _step);
+        for (var i = 0; i <= Mask; i++)
+        {
+            var limit = scale.LimitAt(Math.Min(i, Steps) / _step);
+            _density[i] = BinsPerCluster / limit;
+            _crowd[i] = 4 + (int)(2 * limit);
+        }
     }
 
-    public double At(long rank) => _density[Math.Clamp((int)(rank * _step), 0, Steps)];
+    public double At(long rank) => _density[(int)(rank * _step) & Mask];
 
     /// <summary>More trials than this crowd a bin that begins at a rank.</summary>
-    public double Crowd(long rank) => 4 + (2 * BinsPerCluster / At(rank));
+    public int Crowd(long rank) => _crowd[(int)(rank * _step) & Mask];
 }

@@ -1,47 +1,49 @@
+using System.Runtime.CompilerServices;
+
 namespace Swarm.Engine.Summaries;
 
 /// <summary>The values of bins that hold too many to be one cluster, gathered bin by bin. Scratch memory of one thread.</summary>
 internal sealed class CrowdedBins
 {
-    private readonly double[] _values = new double[Edition.TrialsPerLeaf];
-    private int[] _next = new int[4096];
+    private readonly double[] _values = new double[Edition.TrialsPerLeaf + 1];
     private readonly List<int> _bins = [];
+    private (int Next, int Step)[] _targets = new (int, int)[4096];
     private int _total;
 
     /// <summary>Forgets the last leaf.</summary>
     public void Begin(int bins)
     {
-        if (_next.Length < bins) _next = new int[2 * bins];
-        foreach (var bin in _bins) _next[bin] = 0;
+        foreach (var bin in _bins) _targets[bin] = default;
         _bins.Clear();
         _total = 0;
+        if (_targets.Length < bins) _targets = new (int, int)[2 * bins];
     }
 
     /// <summary>Marks a bin as crowded, in ascending order.</summary>
     public void Mark(int bin, int count)
     {
+        // Place 0 takes the values of all other bins, so that gathering needs no branch.
         _bins.Add(bin);
-
-        // Where its values go, shifted by one so that zero means none.
-        _next[bin] = _total + 1;
+        _targets[bin] = (_total + 1, 1);
         _total += count;
     }
 
     /// <summary>Reads the leaf again and keeps the values of the marked bins.</summary>
-    public void Gather(ReadOnlySpan<double> values, ValueMap map)
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
+    public void Gather(ReadOnlySpan<double> values, ReadOnlySpan<ushort> bins)
     {
         if (_total == 0) return;
-        foreach (var x in values)
+        for (var i = 0; i < values.Length; i++)
         {
-            if (x < map.LowerEdge || x > map.UpperEdge) continue;
-            ref var next = ref _next[LeafBins.BinOf(x, map)];
-            if (next > 0) _values[next++ - 1] = x;
+            ref var target = ref _targets[bins[i]];
+            _values[target.Next] = values[i];
+            target.Next += target.Step;
         }
     }
 
     /// <summary>The gathered values of a marked bin that holds so many; empty for other bins.</summary>
-    public Span<double> ValuesOf(int bin, long count) =>
-        _next[bin] == 0 ? [] : _values.AsSpan(_next[bin] - 1 - (int)count, (int)count);
+    public Span<double> ValuesOf(int bin, int count) =>
+        _targets[bin].Step == 0 ? [] : _values.AsSpan(_targets[bin].Next - count, count);
 
     /// <summary>Sorts values of which many may be equal: those equal to the middle one are set apart first.</summary>
     public static void Sort(Span<double> values)

@@ -1,3 +1,5 @@
+using System.Runtime.CompilerServices;
+
 namespace Swarm.Engine.Summaries;
 
 /// <summary>
@@ -69,6 +71,7 @@ internal sealed class DigestBuilder
     public void CopyTo(TDigest target) => target.Assign(_means.AsSpan(0, _made), _marks.AsSpan(0, _made), _total);
 
     /// <summary>Sorts two digests into one list in the total order (mean, atoms first, weight).</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private void Interleave(TDigest left, TDigest right)
     {
         ReadOnlySpan<double> a = left.GuardedMeans, b = right.GuardedMeans;
@@ -97,6 +100,7 @@ internal sealed class DigestBuilder
     private static bool Precedes(long mark, long other) => (mark & 1) != (other & 1) ? (mark & 1) == 0 : mark < other;
 
     /// <summary>In place: the list of made clusters never overtakes that of taken ones.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private int Join(ReadOnlySpan<long> bounds)
     {
         var means = _means.AsSpan(0, _taken);

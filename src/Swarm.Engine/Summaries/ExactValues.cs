@@ -4,6 +4,7 @@ namespace Swarm.Engine.Summaries;
 internal sealed class ExactValues
 {
     private const int SlotBits = 12;
+    private const int Probe = 256;
     private const int MostDistinct = 1 << (SlotBits - 1);
     private readonly double[] _slots = new double[1 << SlotBits];
     private readonly int[] _counts = new int[1 << SlotBits];
@@ -30,6 +31,21 @@ internal sealed class ExactValues
             // Adding +0 turns -0 into +0, which equals it.
             builder.AddExact(sorted[from] + 0.0, to - from);
         }
+    }
+
+    /// <summary>True where half of the first values repeat others.</summary>
+    public bool LooksDistinct(ReadOnlySpan<double> values)
+    {
+        Array.Clear(_counts);
+        var repeats = 0;
+        foreach (var value in values[..Probe])
+        {
+            var slot = SlotOf(value + 0.0);
+            repeats += _counts[slot]++ > 0 ? 1 : 0;
+            _slots[slot] = value + 0.0;
+        }
+
+        return repeats >= Probe / 2;
     }
 
     /// <summary>Adds the values if few of them are different, counted in a hash table; false, and nothing added, otherwise.</summary>

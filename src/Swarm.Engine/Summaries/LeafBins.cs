@@ -1,3 +1,6 @@
+using System.Numerics;
+using System.Runtime.CompilerServices;
+using System.Runtime.Intrinsics;
 using Swarm.Engine.Numerics;
 
 namespace Swarm.Engine.Summaries;
@@ -6,13 +9,18 @@ namespace Swarm.Engine.Summaries;
 internal sealed unsafe class LeafBins
 {
     private const int Tile = 256;
+    private const int WordBits = 64;
     private readonly double[] _lower = new double[Edition.TrialsPerLeaf];
     private readonly double[] _upper = new double[Edition.TrialsPerLeaf];
+    private readonly ushort[] _places = new ushort[Edition.TrialsPerLeaf];
     private int _lowerCount;
     private int _upperCount;
 
     /// <summary>Sum of the values and number of trials of each bin.</summary>
     public Bin[] Bins { get; private set; } = new Bin[4096];
+
+    /// <summary>The bin of each value; tail values are nowhere.</summary>
+    public ReadOnlySpan<ushort> Places => _places;
 
     public Span<double> Lower => _lower.AsSpan(0, _lowerCount);
 
@@ -33,28 +41,34 @@ internal sealed unsafe class LeafBins
         }
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private void Spread<T>(ReadOnlySpan<double> values, ValueMap map)
         where T : unmanaged, ILanes<T>
     {
         var cells = stackalloc long[Tile];
         var parts = stackalloc double[Tile];
+        var tails = stackalloc ulong[Tile / WordBits];
         fixed (double* first = values)
         fixed (Bin* bins = Bins)
+        fixed (ushort* places = _places)
         fixed ((double First, double Bins)* segments = map.Segments)
         {
             for (var from = 0; from < values.Length; from += Tile)
             {
                 var count = Math.Min(Tile, values.Length - from);
-                var whole = count / T.Count * T.Count;
-                Locate<T>(first + from, whole, map, cells, parts);
-                Locate<Lanes64>(first + from + whole, count - whole, map, cells + whole, parts + whole);
-                Collect(first + from, count, cells, parts, segments, bins);
+                new Span<ulong>(tails, Tile / WordBits).Clear();
+                var whole = count / WordBits * WordBits;
+                Locate<T>(first + from, 0, whole, map, cells, parts, tails);
+                Locate<Lanes64>(first + from, whole, count, map, cells, parts, tails);
+                for (var word = 0; word < Tile / WordBits; word++) MoveOut(first + from + (word * WordBits), tails[word], map.LowerEdge);
+                Collect(first + from, count, cells, parts, segments, bins, places + from);
             }
         }
     }
 
-    /// <summary>Finds each value's cell and the part of it that lies before the value; moves tail values out.</summary>
-    private void Locate<T>(double* values, int count, ValueMap map, long* cells, double* parts)
+    /// <summary>Finds each value's cell, and the part of it that lies before the value, and marks the tails.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
+    private static void Locate<T>(double* values, int from, int to, ValueMap map, long* cells, double* parts, ulong* tails)
         where T : unmanaged, ILanes<T>
     {
         T origin = T.Create(map.Origin), scale = T.Create(map.Scale), one = T.Create(1);
@@ -62,19 +76,18 @@ internal sealed unsafe class LeafBins
 
         // Adding 2^52 leaves a whole number below it in the low bits of the sum.
         T shift = T.Create(1L << 52), low = T.CreateBits(0xFFFF);
-        for (var i = 0; i < count; i += T.Count)
+        for (var i = from; i < to; i += T.Count)
         {
             var x = T.Load(values + i);
+            var outside = T.LessThan(x, lower) | T.LessThan(upper, x);
+            tails[i / WordBits] |= T.SignBits(outside) << (i % WordBits);
             var position = T.FusedMultiplyAdd(x - origin, scale, one);
             position = T.Select(T.LessThan(position, one), one, position);
             position = T.Select(T.LessThan(last, position), last, position);
-            var outside = T.LessThan(x, lower) | T.LessThan(upper, x);
             position = position & ~outside;
             var cell = T.Floor(position);
             T.Store((cell + shift) & low, (double*)(cells + i));
             T.Store(position - cell, parts + i);
-            var tails = T.SignBits(outside);
-            if (tails != 0) MoveOut(values + i, tails, map.LowerEdge);
         }
     }
 
@@ -82,39 +95,48 @@ internal sealed unsafe class LeafBins
     {
         for (; which != 0; which &= which - 1)
         {
-            var x = values[System.Numerics.BitOperations.TrailingZeroCount(which)];
+            var x = values[BitOperations.TrailingZeroCount(which)];
             if (x < lowerEdge) _lower[_lowerCount++] = x;
             else _upper[_upperCount++] = x;
         }
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private static void Collect(
-        double* values, int count, long* cells, double* parts, (double First, double Bins)* segments, Bin* bins)
+        double* values, int count, long* cells, double* parts, (double First, double Bins)* segments, Bin* bins, ushort* places)
     {
-        for (var i = 0; i < count; i++)
+        // Four at a time: their bins are found before any is written, so the additions do not wait for each other.
+        nint i = 0;
+        for (; i < count - 3; i += 4)
         {
-            var segment = segments + cells[i];
-            var bin = bins + double.ConvertToIntegerNative<int>(segment->First + (parts[i] * segment->Bins));
-            bin->Sum += values[i];
-            bin->Count++;
+            var a = places[i] = BinOf(cells[i], parts[i], segments);
+            var b = places[i + 1] = BinOf(cells[i + 1], parts[i + 1], segments);
+            var c = places[i + 2] = BinOf(cells[i + 2], parts[i + 2], segments);
+            var d = places[i + 3] = BinOf(cells[i + 3], parts[i + 3], segments);
+            bins[a].Add(values[i]);
+            bins[b].Add(values[i + 1]);
+            bins[c].Add(values[i + 2]);
+            bins[d].Add(values[i + 3]);
         }
+
+        for (; i < count; i++) bins[places[i] = BinOf(cells[i], parts[i], segments)].Add(values[i]);
     }
 
-    /// <summary>The bin of a value that is no tail value.</summary>
-    public static int BinOf(double x, ValueMap map)
-    {
-        var position = Math.FusedMultiplyAdd(x - map.Origin, map.Scale, 1);
-        position = position < 1 ? 1 : position;
-        position = position > ValueMap.LastPosition ? ValueMap.LastPosition : position;
-        var cell = Math.Floor(position);
-        var (first, bins) = map.Segments[(int)cell];
-        return (int)(first + ((position - cell) * bins));
-    }
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static ushort BinOf(long cell, double part, (double First, double Bins)* segments) =>
+        (ushort)double.ConvertToIntegerNative<long>(segments[cell].First + (part * segments[cell].Bins));
 }
 
 /// <summary>What a bin holds.</summary>
 internal struct Bin
 {
-    public double Sum;
-    public long Count;
+    private Vector128<double> _sumAndCount;
+
+    public readonly double Sum => _sumAndCount[0];
+
+    public readonly int Count => (int)_sumAndCount[1];
+
+    /// <summary>Both in one addition.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public void Add(double value) => _sumAndCount += Vector128.Create(value, 1.0);
 }

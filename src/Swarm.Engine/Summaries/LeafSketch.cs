@@ -17,6 +17,7 @@ internal sealed class LeafSketch(LaneWidth width)
     private readonly CrowdedBins _crowded = new();
     private readonly BinDensity _density = new();
     private readonly ExactValues _exact = new();
+    private readonly TailSort _tailSort = new();
 
     /// <summary>Hands the clusters of the values to the builder.</summary>
     public void Sketch(ReadOnlySpan<double> values, double min, double max, DigestBuilder builder)
@@ -56,6 +57,7 @@ internal sealed class LeafSketch(LaneWidth width)
             return;
         }
 
+        if (_exact.LooksDistinct(values) && _exact.TryAddDistinct(values, builder)) return;
         if (min == max || !_map.Fit(values, min, max, before, leaf))
         {
             if (!_exact.TryAddDistinct(values, builder)) _exact.AddSorted(values, builder);
@@ -63,11 +65,11 @@ internal sealed class LeafSketch(LaneWidth width)
         }
 
         _bins.Spread(values, _map, width);
-        CrowdedBins.Sort(_bins.Lower);
-        CrowdedBins.Sort(_bins.Upper);
+        _tailSort.Sort(_bins.Lower, _map.LowerEdge);
+        _tailSort.Sort(_bins.Upper, _map.UpperEdge);
         if ((HasRepeats(_bins.Lower) || HasRepeats(_bins.Upper)) && _exact.TryAddDistinct(values, builder)) return;
         FindCrowds(before + _bins.Lower.Length, leaf);
-        _crowded.Gather(values, _map);
+        _crowded.Gather(values, _bins.Places);
         ExactValues.AddRuns(_bins.Lower, builder);
         AddBins(builder);
         ExactValues.AddRuns(_bins.Upper, builder);
@@ -102,7 +104,7 @@ internal sealed class LeafSketch(LaneWidth width)
         for (var bin = 1; bin < _map.Bins; bin++)
         {
             var count = _bins.Bins[bin].Count;
-            if (count > 4 && count > _density.Crowd(rank)) _crowded.Mark(bin, (int)count);
+            if (count > _density.Crowd(rank)) _crowded.Mark(bin, count);
             rank += count;
         }
     }
@@ -111,11 +113,12 @@ internal sealed class LeafSketch(LaneWidth width)
     {
         for (var bin = 1; bin < _map.Bins; bin++)
         {
-            var (sum, count) = (_bins.Bins[bin].Sum, _bins.Bins[bin].Count);
+            var count = _bins.Bins[bin].Count;
             if (count == 0) continue;
             var crowd = _crowded.ValuesOf(bin, count);
             if (crowd.Length == 0)
             {
+                var sum = _bins.Bins[bin].Sum;
                 if (count == 1) builder.AddExact(sum, 1);
                 else builder.AddRounded(sum / count, count);
                 continue;

@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using Swarm.Engine.Numerics;
 
 namespace Swarm.Engine.Summaries;
@@ -39,14 +40,15 @@ internal static unsafe class MomentKernel
     /// <summary>The least and the greatest of at least one value.</summary>
     public static (double Min, double Max) ExtremesOf(ReadOnlySpan<double> values, LaneWidth width)
     {
+        var lanes = stackalloc double[Virtual];
         fixed (double* first = values)
         {
             return width switch
             {
-                LaneWidth.Vector512 => Extremes<Lanes512>(first, values.Length),
-                LaneWidth.Vector256 => Extremes<Lanes256>(first, values.Length),
-                LaneWidth.Vector128 => Extremes<Lanes128>(first, values.Length),
-                _ => Extremes<Lanes64>(first, values.Length),
+                LaneWidth.Vector512 => ExtremesAndSums<Lanes512>(first, values.Length, lanes),
+                LaneWidth.Vector256 => ExtremesAndSums<Lanes256>(first, values.Length, lanes),
+                LaneWidth.Vector128 => ExtremesAndSums<Lanes128>(first, values.Length, lanes),
+                _ => ExtremesAndSums<Lanes64>(first, values.Length, lanes),
             };
         }
     }
@@ -58,9 +60,9 @@ internal static unsafe class MomentKernel
         var lanes = stackalloc double[Virtual * 5];
         fixed (double* first = values)
         {
-            var (min, max) = Extremes<T>(first, values.Length);
-            if (min == max) return new Moments { Count = values.Length, Mean = min, Min = min, Max = min };
-            var mean = MeanOf<T>(first, values.Length, lanes);
+            var (min, max) = ExtremesAndSums<T>(first, values.Length, lanes);
+            var mean = MeanOf(first, values.Length, lanes);
+            if (min == max && double.IsFinite(mean)) return new Moments { Count = values.Length, Mean = min, Min = min, Max = min };
             PowerSums<T>(first, values.Length, mean, lanes);
             return new Moments
             {
@@ -77,35 +79,55 @@ internal static unsafe class MomentKernel
         }
     }
 
-    private static (double Min, double Max) Extremes<T>(double* values, int count)
+    /// <summary>The least and greatest value, and the lanes' sums.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
+    private static (double Min, double Max) ExtremesAndSums<T>(double* values, int count, double* lanes)
         where T : unmanaged, ILanes<T>
     {
-        var min = values[0];
-        var max = values[0];
-        var i = 0;
-        if (count >= T.Count)
+        var whole = count / Virtual * Virtual;
+        T low = T.Create(values[0]), high = low, oddLow = low, oddHigh = low;
+        for (var lane = 0; lane < Virtual; lane += T.Count)
         {
-            var low = T.Load(values);
-            var high = low;
-            for (i = T.Count; i <= count - T.Count; i += T.Count)
+            var sum = T.Create(0);
+            var i = lane;
+
+            // Sums keep their order; the extremes have none, and two of each do not wait for each other.
+            for (; i < whole - Virtual; i += 2 * Virtual)
+            {
+                T x = T.Load(values + i), y = T.Load(values + i + Virtual);
+                sum = sum + x + y;
+                low = T.Select(T.LessThan(x, low), x, low);
+                high = T.Select(T.LessThan(high, x), x, high);
+                oddLow = T.Select(T.LessThan(y, oddLow), y, oddLow);
+                oddHigh = T.Select(T.LessThan(oddHigh, y), y, oddHigh);
+            }
+
+            for (; i < whole; i += Virtual)
             {
                 var x = T.Load(values + i);
+                sum += x;
                 low = T.Select(T.LessThan(x, low), x, low);
                 high = T.Select(T.LessThan(high, x), x, high);
             }
 
-            var ends = stackalloc double[2 * Virtual];
-            T.Store(low, ends);
-            T.Store(high, ends + Virtual);
-            for (var lane = 0; lane < T.Count; lane++)
-            {
-                min = ends[lane] < min ? ends[lane] : min;
-                max = ends[Virtual + lane] > max ? ends[Virtual + lane] : max;
-            }
+            T.Store(sum, lanes + lane);
         }
 
-        for (; i < count; i++)
+        low = T.Select(T.LessThan(oddLow, low), oddLow, low);
+        high = T.Select(T.LessThan(high, oddHigh), oddHigh, high);
+        var ends = stackalloc double[2 * Virtual];
+        T.Store(low, ends);
+        T.Store(high, ends + Virtual);
+        double min = values[0], max = min;
+        for (var lane = 0; lane < T.Count; lane++)
         {
+            min = ends[lane] < min ? ends[lane] : min;
+            max = ends[Virtual + lane] > max ? ends[Virtual + lane] : max;
+        }
+
+        for (var i = whole; i < count; i++)
+        {
+            lanes[i - whole] += values[i];
             min = values[i] < min ? values[i] : min;
             max = values[i] > max ? values[i] : max;
         }
@@ -114,34 +136,19 @@ internal static unsafe class MomentKernel
         return (min + 0.0, max + 0.0);
     }
 
-    private static double MeanOf<T>(double* values, int count, double* lanes)
-        where T : unmanaged, ILanes<T>
+    private static double MeanOf(double* values, int count, double* lanes)
     {
-        Sums<T>(values, count, 1, lanes);
         var sum = Tree(lanes);
         if (double.IsFinite(sum)) return sum / count;
 
         // Values near the end of the range: the sum overflows, the mean cannot.
         const double Scale = 1.0 / (1 << 30);
-        Sums<T>(values, count, Scale, lanes);
+        new Span<double>(lanes, Virtual).Clear();
+        for (var i = 0; i < count; i++) lanes[i % Virtual] += values[i] * Scale;
         return Tree(lanes) / count / Scale;
     }
 
-    private static void Sums<T>(double* values, int count, double scale, double* lanes)
-        where T : unmanaged, ILanes<T>
-    {
-        var whole = count / Virtual * Virtual;
-        var factor = T.Create(scale);
-        for (var lane = 0; lane < Virtual; lane += T.Count)
-        {
-            var sum = T.Create(0);
-            for (var i = lane; i < whole; i += Virtual) sum += T.Load(values + i) * factor;
-            T.Store(sum, lanes + lane);
-        }
-
-        for (var i = whole; i < count; i++) lanes[i - whole] += values[i] * scale;
-    }
-
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private static void PowerSums<T>(double* values, int count, double mean, double* lanes)
         where T : unmanaged, ILanes<T>
     {
@@ -183,6 +190,7 @@ internal static unsafe class MomentKernel
         }
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private static long CountAbove<T>(ReadOnlySpan<double> values, double threshold)
         where T : unmanaged, ILanes<T>
     {
@@ -201,6 +209,7 @@ internal static unsafe class MomentKernel
         }
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private static long CountEqual<T>(ReadOnlySpan<double> values, double value)
         where T : unmanaged, ILanes<T>
     {

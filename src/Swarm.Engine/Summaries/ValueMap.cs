@@ -1,3 +1,5 @@
+using System.Runtime.CompilerServices;
+
 namespace Swarm.Engine.Summaries;
 
 /// <summary>
@@ -16,9 +18,9 @@ internal sealed unsafe class ValueMap
     /// <summary>The last number that still lies in the last cell.</summary>
     public const double LastPosition = Cells + 1 - (1.0 / (1L << 43));
 
-    private const int Stride = 4;
+    private const int Stride = 8;
     private const int Group = 8;
-    private const int FewestCells = 48;
+    private const int FewestCells = 100;
     private const int MostZooms = 10;
     private const double TailShare = 0.0125;
     private readonly BinDensity _density = new();
@@ -77,6 +79,7 @@ internal sealed unsafe class ValueMap
         return true;
     }
 
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     private void CountSample(ReadOnlySpan<double> values)
     {
         Array.Clear(_sample);
@@ -89,9 +92,7 @@ internal sealed unsafe class ValueMap
             {
                 for (var k = 0; k < Group; k++)
                 {
-                    var position = ((first[i + k] - low) * scale) + 1;
-                    position = position > 0 ? position : 0;
-                    position = position < Cells + 1 ? position : Cells + 1;
+                    var position = double.MinNative(Cells + 1, double.MaxNative(0, ((first[i + k] - low) * scale) + 1));
                     sample[double.ConvertToIntegerNative<int>(position)]++;
                 }
             }
