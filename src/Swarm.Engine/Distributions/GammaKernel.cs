@@ -76,7 +76,7 @@ internal sealed unsafe class GammaKernel<V> : IDisposable
 
     public void Dispose() => _columns.Dispose();
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void FillUniforms(in ItemStream numbers)
     {
         for (int i = 0; i < _trials; i += V.Count)
@@ -87,7 +87,7 @@ internal sealed unsafe class GammaKernel<V> : IDisposable
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void MakeNormal(int trials)
     {
         double* normals = Normals;
@@ -97,7 +97,7 @@ internal sealed unsafe class GammaKernel<V> : IDisposable
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private int AcceptMost(double* shapes, double* targets, int row, int left)
     {
         double* shape = shapes + ((nint)row * _trials);
@@ -162,7 +162,7 @@ internal sealed unsafe class GammaKernel<V> : IDisposable
     }
 
     /// <summary>Trials, items and shapes of pending values side by side; the last is repeated to fill a vector.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void Gather(in ItemStream numbers, double* shape, int start, int count, int padded)
     {
         for (int k = 0; k < padded; k++)
@@ -175,7 +175,7 @@ internal sealed unsafe class GammaKernel<V> : IDisposable
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void FillUniforms(in ItemStream numbers, int attempt, int count)
     {
         for (int k = 0; k < count; k += V.Count)
@@ -187,7 +187,7 @@ internal sealed unsafe class GammaKernel<V> : IDisposable
     }
 
     /// <summary>Replaces normals by candidates, and uniforms by 1 where the candidate is accepted, by 0 where it is not.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void TestAgainstLogarithms(int count)
     {
         V one = V.Create(1);
@@ -207,7 +207,7 @@ internal sealed unsafe class GammaKernel<V> : IDisposable
     }
 
     /// <summary>Multiplies the values of shapes below 1 by U^(1/a), with a uniform that belongs to no attempt.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void Boost(in ItemStream numbers, double* shape, double* target)
     {
         V one = V.Create(1);

@@ -24,7 +24,7 @@ internal static unsafe class PoissonKernel<V>
     /// <param name="means">Means, zero or more, one a trial.</param>
     /// <param name="target">Receives the counts.</param>
     /// <param name="trials">Number of trials, a multiple of the vector width.</param>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     public static void Fill(in ItemStream numbers, double* means, double* target, int trials)
     {
         for (int i = 0; i < trials; i += V.Count)
@@ -44,7 +44,7 @@ internal static unsafe class PoissonKernel<V>
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private static V Invert(in ItemStream numbers, V index, V mean)
     {
         numbers.Generate(index, 0, out V c0, out V c1, out _, out _);
@@ -68,7 +68,7 @@ internal static unsafe class PoissonKernel<V>
         return count;
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private static V Reject(in ItemStream numbers, V index, V mean, V open)
     {
         V b = V.FusedMultiplyAdd(V.Create(2.53), V.Sqrt(mean), V.Create(0.931));
@@ -104,7 +104,7 @@ internal static unsafe class PoissonKernel<V>
     }
 
     /// <summary>log(n!) by Stirling's series at n + 9, taken back by the product (n + 1) ... (n + 8).</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private static V LogFactorial(V n)
     {
         V product = V.Create(1);

@@ -32,7 +32,7 @@ internal static partial class Elementary
     }
 
     /// <summary>Any x: NaN, infinities, results that overflow or are subnormal.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private static V ExpAnywhere<V>(V x)
         where V : unmanaged, ILanes<V>
     {

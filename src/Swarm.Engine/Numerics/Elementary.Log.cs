@@ -84,7 +84,7 @@ internal static partial class Elementary
     }
 
     /// <summary>Any x: zeros, negatives, subnormals, infinities, NaN.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private static V LogAnywhere<V>(V x)
         where V : unmanaged, ILanes<V>
     {

@@ -88,7 +88,7 @@ internal static partial class Elementary
     }
 
     /// <summary>Any base and exponent.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private static V PowAnywhere<V>(V x, V y)
         where V : unmanaged, ILanes<V>
     {

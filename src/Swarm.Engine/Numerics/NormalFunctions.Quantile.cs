@@ -98,7 +98,7 @@ internal static partial class NormalFunctions
     ];
 
     /// <summary>Any u: the tails, the ends, and what is no probability.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private static V QuantileAnywhere<V>(V u)
         where V : unmanaged, ILanes<V>
     {

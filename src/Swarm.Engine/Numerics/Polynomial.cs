@@ -33,6 +33,7 @@ internal static class Polynomial
         => V.FusedMultiplyAdd(higher, power, lower);
 
     /// <summary>Horner's rule in a loop: for rare paths; hot ones write their terms out.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     public static V Evaluate<V>(ReadOnlySpan<double> coefficients, V x)
         where V : unmanaged, ILanes<V>
     {

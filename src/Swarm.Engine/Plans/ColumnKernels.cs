@@ -11,7 +11,7 @@ namespace Swarm.Engine.Plans;
 internal static unsafe class ColumnKernels<V>
     where V : unmanaged, ILanes<V>
 {
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     public static void Unary<F>(Operand a, double* target, int trials)
         where F : IUnaryFunction
     {
@@ -24,7 +24,7 @@ internal static unsafe class ColumnKernels<V>
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     public static void Binary<F>(Operand a, Operand b, double* target, int trials)
         where F : IBinaryFunction
     {
@@ -39,7 +39,7 @@ internal static unsafe class ColumnKernels<V>
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     public static void Select(Operand condition, Operand a, Operand b, double* target, int trials)
     {
         for (int i = 0; i < trials; i += V.Count)
@@ -49,7 +49,7 @@ internal static unsafe class ColumnKernels<V>
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     public static void Copy(Operand a, double* target, int trials)
     {
         for (int i = 0; i < trials; i += V.Count)
@@ -59,16 +59,44 @@ internal static unsafe class ColumnKernels<V>
     }
 
     /// <summary>The first trial whose value is not finite and whose condition, if there is one, is true; -1 if none.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
     public static int FirstFault(Operand a, Operand? condition, int trials)
     {
-        V faults = V.Create(0);
-        for (int i = 0; i < trials; i += V.Count)
+        if (condition is not { } chosen)
         {
-            faults |= Faulty(a, condition, i);
+            return AllFinite(a, trials) ? -1 : Locate(a, null, trials);
         }
 
-        return V.Any(faults) ? Locate(a, condition, trials) : -1;
+        return AllFinite(a, chosen, trials) ? -1 : Locate(a, condition, trials);
+    }
+
+    /// <summary>Zero times a finite value is zero, times any other NaN: one operation a vector, and one test a column.</summary>
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
+    private static bool AllFinite(Operand a, int trials)
+    {
+        double* source = a.Start;
+        double* end = source + (a.IsConstant ? V.Count : trials);
+        V zero = V.Create(0);
+        V sum = zero;
+        for (; source < end; source += V.Count)
+        {
+            sum = V.FusedMultiplyAdd(V.Load(source), zero, sum);
+        }
+
+        return !V.Any(~V.EqualTo(sum, zero));
+    }
+
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
+    private static bool AllFinite(Operand a, Operand condition, int trials)
+    {
+        V zero = V.Create(0);
+        V sum = zero;
+        for (int i = 0; i < trials; i += V.Count)
+        {
+            V value = V.Load(a.At(i)) & Truth.Mask(V.Load(condition.At(i)));
+            sum = V.FusedMultiplyAdd(value, zero, sum);
+        }
+
+        return !V.Any(~V.EqualTo(sum, zero));
     }
 
     private static int Locate(Operand a, Operand? condition, int trials)

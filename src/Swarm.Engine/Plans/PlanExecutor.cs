@@ -8,10 +8,10 @@ namespace Swarm.Engine.Plans;
 internal abstract unsafe class PlanExecutor : IDisposable
 {
     /// <summary>
-    /// Trials of a tile: columns of 4 KiB, a dozen of which fit the first cache beside each other; long enough that choosing a
+    /// Trials of a tile: columns of 8 KiB, of which the few in use at a time fit the first cache; long enough that choosing a
     /// kernel costs little. Tiles do not show in the bits.
     /// </summary>
-    public const int TileTrials = 512;
+    public const int TileTrials = 1024;
 
     private const int CacheLine = 64;
 

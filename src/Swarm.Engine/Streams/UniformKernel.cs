@@ -47,7 +47,7 @@ internal static unsafe class UniformKernel
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private static void FillUniforms<V>(DrawSlice slice, double* group, int trials)
         where V : unmanaged, ILanes<V>
     {
@@ -72,7 +72,7 @@ internal static unsafe class UniformKernel
     }
 
     /// <summary>A loop of its own: one copy of a long transform is all that the compiler is willing to inline.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private static void Transform<V, T>(T transform, double* values, int trials)
         where V : unmanaged, ILanes<V>
         where T : unmanaged, IUniformTransform

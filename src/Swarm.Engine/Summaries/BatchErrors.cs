@@ -30,7 +30,9 @@ internal sealed class BatchErrors : IFigureErrors
     public Estimate Var(double level)
     {
         var at = Array.IndexOf(_levels, level);
-        return Of(TailFigures.Var(_index, level, _result.Request.Adverse), batch => batch.Var[at]);
+        var adverse = _result.Request.Adverse;
+        var blur = _index.BlurOfValueAt(TailFigures.RankOf(_index, level, adverse));
+        return Of(TailFigures.Var(_index, level, adverse), batch => batch.Var[at], blur);
     }
 
     public Estimate Tvar(double level)
@@ -47,7 +49,10 @@ internal sealed class BatchErrors : IFigureErrors
         return estimate with { Low = Math.Max(0, estimate.Low!.Value), High = Math.Min(1, estimate.High!.Value) };
     }
 
-    private Estimate Of(double value, Func<BatchFigures, double> figure)
+    /// <param name="value">The full run's figure.</param>
+    /// <param name="figure">The same figure of a batch.</param>
+    /// <param name="blur">A standard error that the batches do not show.</param>
+    private Estimate Of(double value, Func<BatchFigures, double> figure, double blur = 0)
     {
         var squares = 0.0;
         foreach (var batch in _result.Batches)
@@ -57,7 +62,7 @@ internal sealed class BatchErrors : IFigureErrors
         }
 
         var ofOneBatch = squares / (_result.Batches.Count - 1);
-        var se = Math.Sqrt(ofOneBatch * _result.TrialsPerBatch / _result.Summary.Trials);
+        var se = Math.Sqrt((ofOneBatch * _result.TrialsPerBatch / _result.Summary.Trials) + (blur * blur));
         return double.IsFinite(se) ? Confidence.Even(value, se, _quantile) : Estimate.Without(value, FigureReasons.Range);
     }
 }

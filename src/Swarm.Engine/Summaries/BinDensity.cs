@@ -21,7 +21,7 @@ internal sealed class BinDensity
         {
             var limit = scale.LimitAt(Math.Min(i, Steps) / _step);
             _density[i] = BinsPerCluster / limit;
-            _crowd[i] = 4 + (int)(2 * limit);
+            _crowd[i] = 12 + (int)(2 * limit);
         }
     }
 

@@ -9,6 +9,7 @@ internal sealed class ClosedFormErrors(OutcomeRequest request, OutcomeSummary su
     public Estimate Mean()
     {
         var se = _moments.Sd / Math.Sqrt(_moments.Count);
+        if (!double.IsFinite(_moments.M3) || !double.IsFinite(_moments.M4)) return Confidence.Even(_moments.Mean, se);
         var variance = _moments.Central(2);
         return SkewedMean.Interval(
             _moments.Mean, se, _moments.Count, _moments.Skewness, _moments.Central(4) / (variance * variance));
@@ -44,8 +45,8 @@ internal sealed class ClosedFormErrors(OutcomeRequest request, OutcomeSummary su
         var value = TailFigures.Var(index, level, request.Adverse);
         var n = _moments.Count;
         var beyond = Ranks.TailMass(level, n);
-        var blur = (double)index.BlurAt(TailFigures.RankOf(index, level, request.Adverse));
-        var spread = Math.Sqrt((n * level * (1 - level)) + (blur * blur / 12));
+        var blur = index.BlurAt(TailFigures.RankOf(index, level, request.Adverse));
+        var spread = Math.Sqrt((n * level * (1 - level)) + (blur * blur));
 
         // Cornish & Fisher (1938): the binomial's skewness moves both quantiles by (z^2 - 1) (2p - 1) / 6.
         var center = beyond + (((Z * Z) - 1) / 6 * ((2 * level) - 1));

@@ -78,22 +78,21 @@ internal sealed class DigestBuilder
         ReadOnlySpan<long> aMarks = left.GuardedMarks, bMarks = right.GuardedMarks;
         Span<double> means = _means;
         Span<long> marks = _marks;
-        int i = 0, j = 0;
         var count = left.Count + right.Count;
+        int i = 0, j = 0;
         for (var k = 0; k < count; k++)
         {
+            // Which comes first is a coin toss that no branch predictor wins, so nothing branches on it.
             var x = a[i];
             var y = b[j];
-            if (y < x || (x == y && Precedes(bMarks[j], aMarks[i])))
-            {
-                means[k] = y;
-                marks[k] = bMarks[j++];
-            }
-            else
-            {
-                means[k] = x;
-                marks[k] = aMarks[i++];
-            }
+            var mark = aMarks[i];
+            var other = bMarks[j];
+            var taken = y < x ? 1 : 0;
+            if (x == y) taken = Precedes(other, mark) ? 1 : 0;
+            means[k] = Math.Min(x, y);
+            marks[k] = mark ^ ((mark ^ other) & -(long)taken);
+            i += 1 - taken;
+            j += taken;
         }
     }
 

@@ -68,11 +68,21 @@ internal sealed class DigestIndex
         return ValueWithin(i, position);
     }
 
-    /// <summary>The weight of the mixed cluster that a rank falls into; 0 in an atom, where ranks are exact.</summary>
-    public long BlurAt(long rank)
+    /// <summary>
+    /// The standard error of a rank inside a mixed cluster: 0.4 of its weight, as measured after whole merge trees
+    /// (docs/figures.md); 0 in an atom.
+    /// </summary>
+    public double BlurAt(long rank)
     {
         var i = ClusterAt(rank - 0.5);
-        return IsAtomAt(i) ? 0 : WeightAt(i);
+        return IsAtomAt(i) ? 0 : 0.4 * WeightAt(i);
+    }
+
+    /// <summary>The standard error of the value at a rank that comes from the sketch alone.</summary>
+    public double BlurOfValueAt(long rank)
+    {
+        var blur = BlurAt(rank);
+        return blur == 0 ? 0 : 0.5 * (ValueAtPosition(Math.Min(Total, rank + blur)) - ValueAtPosition(Math.Max(0, rank - blur)));
     }
 
     /// <summary>How many trials lie at or below a value; whole where the neighbours are atoms.</summary>

@@ -6,14 +6,17 @@ namespace Swarm.Engine.Summaries;
 /// </summary>
 internal static class Dominance
 {
-    /// <summary>Fewer trials than this dominate.</summary>
-    public const int Handful = 3;
+    /// <summary>Fewer trials than this dominate a moment of the whole sample.</summary>
+    public const int Handful = 5;
+
+    /// <summary>Fewer than this dominate a tail, which is few trials anyway, and whose interval leans with its skewness.</summary>
+    public const int TailHandful = 2;
 
     /// <summary>
     /// The least number of trials that carry over half of the sum of |x - center|^order over a range of clusters, if that is
-    /// below a handful; otherwise null.
+    /// below a given handful; otherwise null.
     /// </summary>
-    public static int? Dominating(DigestIndex index, double center, int order, int first, int last)
+    public static int? Dominating(DigestIndex index, double center, int order, int first, int last, int handful)
     {
         var total = 0.0;
         for (var i = first; i <= last; i++) total += index.WeightAt(i) * Power(index.MeanAt(i) - center, order);
@@ -31,7 +34,7 @@ internal static class Dominance
             {
                 carried += each;
                 trials++;
-                if (trials >= Handful) return null;
+                if (trials >= handful) return null;
                 if (!(carried <= total / 2)) return (int)trials;
             }
         }

@@ -3,7 +3,8 @@ namespace Swarm.Engine.Summaries;
 /// <summary>
 /// Asks for each figure's error unless there is a reason against it. An error rests on twice the figure's own order: the mean's
 /// on the sum of squares, that of the standard deviation on fourth powers, the skewness's on sixth powers; where a handful of
-/// trials carries over half of that sum, the figure is shown without an error.
+/// trials carries over half of that sum, the figure is shown without an error. A rank needs no moments, so VaR and probabilities
+/// always have one.
 /// </summary>
 internal sealed class FigureTable(OutcomeResult result, DigestIndex index, IFigureErrors errors, string? reasonAgainstAll)
 {
@@ -27,9 +28,11 @@ internal sealed class FigureTable(OutcomeResult result, DigestIndex index, IFigu
         if (reasonAgainstAll is not null) return Estimate.Without(value, reasonAgainstAll);
         if (_moments.Min == _moments.Max) return ofConstant;
         if (!double.IsFinite(_moments.PowerSum(order))) return Estimate.Without(value, FigureReasons.Range);
-        var dominating = Dominance.Dominating(index, _moments.Mean, order, 0, index.Count - 1);
-        return dominating is int trials ? Estimate.Without(value, Dominance.Reason(trials)) : withError();
+        return Dominating(order) is int trials ? Estimate.Without(value, Dominance.Reason(trials)) : withError();
     }
+
+    private int? Dominating(int order) =>
+        Dominance.Dominating(index, _moments.Mean, order, 0, index.Count - 1, Dominance.Handful);
 
     private LevelFigures AtLevel(double level)
     {
@@ -50,13 +53,15 @@ internal sealed class FigureTable(OutcomeResult result, DigestIndex index, IFigu
         return Math.Min(beyond, _moments.Count - beyond) < FewestTailTrials ? FigureReasons.FewTailTrials : null;
     }
 
+    /// <summary>TVaR rests on the squares, as the mean does: those of the whole sample and those of its tail.</summary>
     private int? DominatingTail(double level, double edge)
     {
+        if (Dominating(2) is int trials) return trials;
         var rank = TailFigures.RankOf(index, level, result.Request.Adverse);
         var cluster = index.ClusterAt(rank - 0.5);
         return result.Request.Adverse == Adverse.High
-            ? Dominance.Dominating(index, edge, 2, cluster, index.Count - 1)
-            : Dominance.Dominating(index, edge, 2, 0, cluster);
+            ? Dominance.Dominating(index, edge, 2, cluster, index.Count - 1, Dominance.TailHandful)
+            : Dominance.Dominating(index, edge, 2, 0, cluster, Dominance.TailHandful);
     }
 
     private ExceedanceFigure Above(double threshold, int position)

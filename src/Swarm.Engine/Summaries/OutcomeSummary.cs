@@ -30,7 +30,7 @@ public sealed class OutcomeSummary
     public long Trials => Moments.Count;
 
     /// <summary>Reads a summary back from its parts.</summary>
-    /// <exception cref="ArgumentException">The parts are not of the same trials, or an exceedance count lies outside 0..n.</exception>
+    /// <exception cref="ArgumentException">The parts are not of the same trials, or no sample has them.</exception>
     public static OutcomeSummary FromParts(
         Moments moments, ReadOnlySpan<long> exceedances, TDigest digest, IReadOnlyList<BatchFigures> blocks)
     {
@@ -38,6 +38,8 @@ public sealed class OutcomeSummary
             throw new ArgumentException($"The moments are of {moments.Count} trials, the digest of {digest.TotalWeight}.");
         if (moments.Count < 1 || moments.Min != digest.Min || moments.Max != digest.Max)
             throw new ArgumentException("The moments and the digest disagree on the least or greatest value.");
+        if (!double.IsFinite(moments.Mean) || moments.M2 < 0 || moments.M4 < 0 || moments.M6 < 0)
+            throw new ArgumentException("The mean is not finite, or an even power sum is negative.");
         foreach (var count in exceedances)
         {
             if (count < 0 || count > moments.Count)

@@ -130,7 +130,9 @@ internal sealed unsafe class ValueMap
             }
 
             var trials = _sample[cell] * Stride;
-            var wanted = Math.Floor(trials * _density.At(rank + (trials / 2))) + 1;
+
+            // One group more than the sample shows: a cell that it missed by chance must not crowd its bins.
+            var wanted = Math.Floor((trials + Stride) * _density.At(rank + (trials / 2))) + 1;
             rank += trials;
             Segments[cell] = (bins, wanted);
             bins += wanted;

@@ -25,4 +25,28 @@ public class SketchAccuracyTests(ITestOutputHelper output)
 
         output.WriteLine($"{stream}: {digest.Count} clusters");
     }
+
+    [Theory]
+    [Trait("Category", "Slow")]
+    [InlineData("uniform")]
+    [InlineData("odds")]
+    [InlineData("90 % zeros")]
+    public void Tail_ranks_of_100_million_trials_err_by_less_than_a_fifth_of_the_sampling_error(string stream)
+    {
+        const long N = 100_000_000;
+        var digest = LongStreams.Fold(stream, N);
+
+        var answers = _tailLevels.Select(digest.Quantile).ToArray();
+        var (below, atOrBelow) = LongStreams.CountRanks(stream, N, answers);
+        for (var k = 0; k < answers.Length; k++)
+        {
+            var p = _tailLevels[k];
+            var error = Math.Max(0, Math.Max(below[k] - (p * N), (p * N) - atOrBelow[k]));
+            var ratio = error / Math.Sqrt(p * (1 - p) * N);
+            output.WriteLine($"{stream} {p}: {ratio:f4} of the sampling error");
+            Assert.InRange(ratio, 0, 0.2);
+        }
+
+        output.WriteLine($"{stream}: {digest.Count} clusters");
+    }
 }

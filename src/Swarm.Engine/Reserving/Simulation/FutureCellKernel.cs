@@ -81,7 +81,7 @@ internal sealed unsafe class FutureCellKernel<V> : IDisposable
     }
 
     /// <summary>Size in units of the scale: the gamma's shape, the count's mean.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void Measure(int cell, double scale)
     {
         double* mean = _means[cell];
@@ -92,7 +92,7 @@ internal sealed unsafe class FutureCellKernel<V> : IDisposable
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void Scale(int cell, double scale)
     {
         double* mean = _means[cell];

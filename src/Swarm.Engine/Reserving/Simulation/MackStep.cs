@@ -28,7 +28,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
     }
 
     /// <summary>Draws a factor with a mean and a standard error, lognormal so that it stays above 0.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     public void DrawFactor(in ItemStream numbers, double mean, double error, double* target)
     {
         double logVariance = Elementary.Log1p(error / mean * (error / mean));
@@ -64,7 +64,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
         _gamma.Dispose();
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void Multiply(double* cumulative, double* factor)
     {
         for (int t = 0; t < _trials; t += V.Count)
@@ -74,7 +74,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
     }
 
     /// <summary>Shape f^2 C^alpha / sigma^2, scale sigma^2 C^(1 - alpha) / f.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void AdvanceGamma(in ItemStream numbers, double* factor, double sigma, double* cumulative)
     {
         double* shape = _columns[0];
@@ -96,7 +96,7 @@ internal sealed unsafe class MackStep<V> : IDisposable
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void AdvanceLognormal(in ItemStream numbers, double* factor, double sigma, double* cumulative)
     {
         V variance = V.Create(sigma * sigma);

@@ -94,7 +94,7 @@ internal sealed unsafe class PseudoTriangleKernel<V> : IDisposable
     }
 
     /// <summary>Four picks from the pool a trial, as integers in the scratch columns.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void DrawPicks(ItemStream numbers, int attempt)
     {
         V size = V.CreateBits((ulong)_input.Pool.Length);
@@ -109,7 +109,7 @@ internal sealed unsafe class PseudoTriangleKernel<V> : IDisposable
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void LookUp(double* picks)
     {
         double* residuals = Residuals;
@@ -126,7 +126,7 @@ internal sealed unsafe class PseudoTriangleKernel<V> : IDisposable
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void Accumulate(int origin, int development, int cell)
     {
         double* cumulative = _cumulative[origin];
@@ -158,7 +158,7 @@ internal sealed unsafe class PseudoTriangleKernel<V> : IDisposable
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void FitFactor(int development)
     {
         double* factor = _factors[development];
@@ -173,7 +173,7 @@ internal sealed unsafe class PseudoTriangleKernel<V> : IDisposable
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void Replace(double* column, double* other)
     {
         for (int t = 0; t < _trials; t += V.Count)

@@ -66,7 +66,7 @@ internal sealed unsafe class RunOffKernel<V> : IDisposable
     }
 
     /// <summary>The next cell's conditional mean, and the cumulative amount after it.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void Advance(double* factor, double* mean)
     {
         double* cumulative = _cumulative[0];
@@ -79,7 +79,7 @@ internal sealed unsafe class RunOffKernel<V> : IDisposable
         }
     }
 
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     private void TakeTail(double* tailExcess, double share, double* mean)
     {
         double* cumulative = _cumulative[0];

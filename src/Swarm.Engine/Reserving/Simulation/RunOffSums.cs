@@ -32,7 +32,7 @@ internal sealed unsafe class RunOffSums<V> : IDisposable
     }
 
     /// <summary>Adds the amounts of a future cell.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     public void Add(int origin, int development, double* cell)
     {
         double* unpaid = _sums[RunOffOutputs.Unpaid];
@@ -48,7 +48,7 @@ internal sealed unsafe class RunOffSums<V> : IDisposable
     }
 
     /// <summary>Adds the conditional means of a future cell.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     public void AddExpected(double* cell)
     {
         double* sum = _sums[RunOffOutputs.Expected];
@@ -59,7 +59,7 @@ internal sealed unsafe class RunOffSums<V> : IDisposable
     }
 
     /// <summary>Writes the columns that are used, moved to the booked estimate.</summary>
-    [MethodImpl(MethodImplOptions.NoInlining)]
+    [MethodImpl(MethodImplOptions.NoInlining | MethodImplOptions.AggressiveOptimization)]
     public void Write(double** outputs, int offset, int trials)
     {
         V scale = V.Create(_booking.Scale);
