@@ -76,4 +76,41 @@ public sealed class NamesTests
     [Fact]
     public void Another_seed_moves_every_draw() =>
         Assert.NotEqual(TestModel.Values(Model, seed: 1)["b"], TestModel.Values(Model, seed: 2)["b"]);
+
+    [Theory]
+    [InlineData("odp_bootstrap")]
+    [InlineData("mack")]
+    public void A_triangle_keeps_its_numbers_beside_other_triangles_and_draws(string method)
+    {
+        string alone = $$"""
+            model: test
+            triangles:
+              motor: {data: motor.csv, amounts: cumulative, method: {{method}}}
+            outcomes:
+              motor.unpaid: {}
+            """;
+        string together = alone
+            .Replace("triangles:", "draws:\n  a: normal(mean=0, sd=1)\ntriangles:\n  fleet: {data: fleet.csv, amounts: cumulative, method: mack}", StringComparison.Ordinal)
+            .Replace("outcomes:", "outcomes:\n  a: {}\n  fleet.unpaid: {}", StringComparison.Ordinal);
+        Dictionary<string, double[]> before = TestModel.Values(alone);
+        Dictionary<string, double[]> after = TestModel.Values(together);
+
+        Assert.All(before, outcome => Assert.Equal(outcome.Value, after[outcome.Key]));
+        Assert.NotEqual(after["motor.unpaid"], after["fleet.unpaid"]);
+    }
+
+    [Fact]
+    public void A_renamed_triangle_draws_other_numbers()
+    {
+        const string text = """
+            model: test
+            triangles:
+              motor: {data: motor.csv, amounts: cumulative, method: odp_bootstrap}
+            outcomes:
+              motor.unpaid: {}
+            """;
+        double[] renamed = TestModel.Values(text.Replace("  motor", "  cars", StringComparison.Ordinal))["cars.unpaid"];
+
+        Assert.NotEqual(TestModel.Values(text)["motor.unpaid"], renamed);
+    }
 }

@@ -8,8 +8,16 @@ internal static class TestModel
 {
     public static Model Read(string text)
     {
-        ModelReading reading = ModelReader.Read("model.yaml", text, _ => null);
+        ModelReading reading = ModelReader.Read("model.yaml", text, Data);
         return reading.Model ?? throw new InvalidOperationException(string.Join('\n', reading.Diagnostics));
+    }
+
+    /// <summary>The triangle of Taylor &amp; Ashe (1983) under any name that ends in csv.</summary>
+    private static DataFile? Data(string name)
+    {
+        if (!name.EndsWith(".csv", StringComparison.Ordinal)) return null;
+        string text = string.Join('\n', TestFile.Lines("reserving-taylor-ashe.csv"));
+        return new DataFile(name, System.Text.Encoding.UTF8.GetBytes(text));
     }
 
     public static RunOutcome Run(string text, long trials = 20_000, int threads = 2, ulong seed = 1) =>
